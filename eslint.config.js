@@ -1,0 +1,21 @@
+import eslint from '@eslint/js';
+import prettier from 'eslint-config-prettier';
+import tseslint from 'typescript-eslint';
+
+export default tseslint.config(
+  { ignores: ['dist/', 'out/', 'coverage/', 'node_modules/'] },
+  eslint.configs.recommended,
+  ...tseslint.configs.strictTypeChecked,
+  prettier,
+  {
+    languageOptions: { parserOptions: { projectService: true, tsconfigRootDir: import.meta.dirname } },
+    rules: {
+      '@typescript-eslint/restrict-template-expressions': ['error', { allowNumber: true }],
+      '@typescript-eslint/no-non-null-assertion': 'off',
+      '@typescript-eslint/switch-exhaustiveness-check': 'error',
+      '@typescript-eslint/no-confusing-void-expression': ['error', { ignoreArrowShorthand: true }],
+      eqeqeq: 'error',
+    },
+  },
+  { files: ['**/*.js'], ...tseslint.configs.disableTypeChecked },
+);

@@ -1,0 +1,148 @@
+import type { Assumption } from './reactor-specification.js';
+
+/** Why a run ended before the end of the bed. Texts for each stand in `bed/stop-messages.ts`. */
+export type StopReason =
+  | 'pressure_used_up'
+  | 'property_range_left'
+  | 'no_pellet_state'
+  | 'reactant_overdrawn'
+  | 'step_limit'
+  | 'rate_not_finite';
+
+export interface RunStop {
+  readonly reason: StopReason;
+  /** m from the inlet */
+  readonly position: number;
+  /** One or two sentences for the user: what happened and what can be done. */
+  readonly message: string;
+}
+
+/** Columns along the bed, one entry per output position; SI. Species and reactions in case order. */
+export interface Profile {
+  /** m */
+  readonly positions: Float64Array;
+  /** K, bulk fluid */
+  readonly temperatures: Float64Array;
+  /** Pa */
+  readonly pressures: Float64Array;
+  /** K; absent where nothing is cooled. */
+  readonly coolantTemperatures?: Float64Array;
+  /** mol/s, whole reactor; one column per species. */
+  readonly molarFlows: readonly Float64Array[];
+  readonly moleFractions: readonly Float64Array[];
+  /** mol/(kg s): averaged over the pellet, per catalyst mass; one column per reaction. */
+  readonly rates: readonly Float64Array[];
+  /** Averaged rate over the rate at bulk conditions; NaN where the latter vanishes. One column per reaction. */
+  readonly effectiveness: readonly Float64Array[];
+  /** K */
+  readonly surfaceTemperatures: Float64Array;
+  /** K */
+  readonly centreTemperatures: Float64Array;
+}
+
+/** Inside of one pellet, from the centre to the surface; SI. */
+export interface PelletProfile {
+  readonly label: 'inlet' | 'hottest' | 'outlet' | 'requested';
+  /** m from the inlet */
+  readonly position: number;
+  /** 0 centre to 1 surface */
+  readonly relativeRadii: Float64Array;
+  /** mol/m³, one array per species */
+  readonly concentrations: readonly Float64Array[];
+  /** K */
+  readonly temperatures: Float64Array;
+  /** Bulk conditions outside the film. */
+  readonly bulkConcentrations: readonly number[];
+  readonly bulkTemperature: number;
+}
+
+export type RunEventKind =
+  | 'temperature_limit_crossed'
+  | 'pressure_drop_limit_crossed'
+  | 'target_conversion_reached'
+  | 'peak_temperature'
+  | RunStop['reason'];
+
+export interface RunEvent {
+  readonly kind: RunEventKind;
+  /** m from the inlet */
+  readonly position: number;
+  readonly message: string;
+}
+
+/** A dimensionless or temperature-like figure that engineers judge a pellet or bed by. */
+export interface DimensionlessGroup {
+  /** Trade name, e.g. `Thiele modulus`. */
+  readonly name: string;
+  /** Reaction or species it belongs to; absent for the bed as a whole. */
+  readonly of?: string;
+  readonly value: number;
+  /** `1` for dimensionless, else SI. */
+  readonly unit: string;
+  /** Definition in words and symbols. */
+  readonly definition: string;
+  readonly source: string;
+}
+
+export interface EffectivenessSummary {
+  readonly inlet: number | null;
+  readonly outlet: number | null;
+  /** Weighted by the bulk rate along the bed: total averaged rate over total rate at bulk conditions. */
+  readonly mean: number | null;
+}
+
+export interface RunResult {
+  readonly status: 'complete' | 'stopped';
+  readonly stop?: RunStop;
+  readonly speciesIds: readonly string[];
+  readonly reactionNames: readonly string[];
+  readonly profile: Profile;
+  readonly pellets: readonly PelletProfile[];
+  readonly outlet: {
+    /** m; the bed's length, or where the run stopped. */
+    readonly position: number;
+    readonly temperature: number;
+    readonly pressure: number;
+    /** mol/s, whole reactor */
+    readonly molarFlows: readonly number[];
+    readonly moleFractions: readonly number[];
+  };
+  /** Of every species that is fed and of which less leaves; NaN never. */
+  readonly conversions: readonly { readonly speciesIndex: number; readonly value: number }[];
+  readonly selectivities: readonly {
+    readonly productIndex: number;
+    readonly reactantIndex: number;
+    readonly selectivity: number | null;
+    readonly yield: number;
+  }[];
+  readonly peak: { readonly temperature: number; readonly position: number };
+  /** Pa */
+  readonly pressureDrop: number;
+  /** W given to the coolant, whole reactor; negative when the bed is heated. */
+  readonly heatRemoved: number;
+  /** kg, whole reactor */
+  readonly catalystMass: number;
+  readonly effectiveness: readonly EffectivenessSummary[];
+  /** Relative closure, worst along the bed: |in - out| over what is in. */
+  readonly balances: {
+    readonly mass: number;
+    readonly elements: Readonly<Record<string, number>>;
+    readonly energy: number;
+  };
+  /** At the inlet. */
+  readonly groups: readonly DimensionlessGroup[];
+  readonly events: readonly RunEvent[];
+  readonly warnings: readonly string[];
+  readonly assumptions: readonly Assumption[];
+  readonly work: {
+    readonly steps: number;
+    readonly rejectedSteps: number;
+    readonly rightHandSides: number;
+    readonly jacobians: number;
+    readonly pelletSolves: number;
+    readonly pelletIterations: number;
+    readonly pelletFactorisations: number;
+    readonly rateEvaluations: number;
+    readonly largestPelletPoints: number;
+  };
+}
