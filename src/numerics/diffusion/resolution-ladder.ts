@@ -14,11 +14,12 @@ const gradingRatio = 5;
 
 /**
  * Resolutions from coarse to fine. Single polynomials serve while the reaction zone is a fair part of the radius; then elements graded
- * geometrically to the surface, each rung of them reaching a zone five times thinner, down to about 1/20 000 of the radius.
+ * geometrically to the surface, each rung of them reaching a zone five times thinner, down to about 1/20 000 of the radius. Each also has
+ * more nodes per element, so that comparing two rungs shows errors anywhere in the pellet, not at the surface alone.
  */
 const rungs: readonly Rung[] = [
   ...[3, 4, 5, 6, 8, 10, 13, 16, 20].map((nodes): Rung => ({ kind: 'single', nodes })),
-  ...[2, 3, 4, 5, 6].map((innerEnds): Rung => ({ kind: 'graded', nodesPerElement: 9, innerEnds })),
+  ...[2, 3, 4, 5, 6].map((innerEnds): Rung => ({ kind: 'graded', nodesPerElement: 7 + innerEnds, innerEnds })),
 ];
 
 export const finestRung: number = rungs.length - 1;

@@ -1,0 +1,66 @@
+import { findReactionBasis } from '../kinetics/independent-reactions.js';
+import type { PelletModelInput } from './pellet-model.js';
+
+/**
+ * The pellet's unknowns. With constant diffusivities every concentration and the temperature follow from one field φ_k per
+ * independent reaction, ∇²φ_k = -q_k with q_k = Σ_j combination[k][j] r_j and φ_k = 0 on the surface:
+ *
+ *   c_i = c_i,bulk + Σ_k ν_ik (φ_k / De_i + L <q_k> / kc_i)
+ *   T   = T_bulk   + Σ_k (-ΔH_k) (φ_k / λ + L <q_k> / h)
+ *
+ * where <q_k> is the average over the pellet and L its volume over surface. The first term in brackets is diffusion, the second the film.
+ *
+ * @source the linear relation between concentrations and temperature is Prater's (1958), Chem. Eng. Sci. 8, 284, taken for several reactions
+ */
+export interface FieldBasis {
+  readonly fieldCount: number;
+  /** Row-major `fieldCount × reactionCount`: sources of the fields from the reaction rates. */
+  readonly combination: Float64Array;
+  /** Reactions whose heats are the heats of the fields. */
+  readonly independent: readonly number[];
+  /** Species that take part, ascending; the others keep their bulk concentration. */
+  readonly activeSpecies: readonly number[];
+  /** Row-major `fieldCount × speciesCount`: ν_ik / De_i. */
+  readonly diffusionCoefficients: Float64Array;
+  /** Row-major `fieldCount × speciesCount`: ν_ik L / kc_i. */
+  readonly filmCoefficients: Float64Array;
+  /** 1/λ and L/h, multiplied by -ΔH_k where used. */
+  readonly inverseConductivity: number;
+  readonly filmHeatResistance: number;
+  readonly hasFilm: boolean;
+}
+
+export function createFieldBasis(input: PelletModelInput): FieldBasis {
+  const { pellet, speciesCount, stoichiometry, referenceHeats } = input;
+  const { independent, combination } = findReactionBasis(stoichiometry, referenceHeats);
+  const fieldCount = independent.length;
+  const { diffusionLength } = pellet.geometry;
+  const diffusionCoefficients = new Float64Array(fieldCount * speciesCount);
+  const filmCoefficients = new Float64Array(fieldCount * speciesCount);
+  const activeSpecies: number[] = [];
+  for (let i = 0; i < speciesCount; i++) {
+    if (stoichiometry.some((row) => row[i] !== 0)) activeSpecies.push(i);
+  }
+  independent.forEach((reaction, k) => {
+    activeSpecies.forEach((i) => {
+      const coefficient = stoichiometry[reaction]![i]!;
+      diffusionCoefficients[k * speciesCount + i] = coefficient / pellet.effectiveDiffusivities[i]!;
+      filmCoefficients[k * speciesCount + i] =
+        (coefficient * diffusionLength) / pellet.film.massTransfer[i]!;
+    });
+  });
+  const isIsothermal = referenceHeats === undefined;
+  const inverseConductivity = isIsothermal ? 0 : 1 / pellet.thermalConductivity;
+  const filmHeatResistance = isIsothermal ? 0 : diffusionLength / pellet.film.heatTransfer;
+  return {
+    fieldCount,
+    combination,
+    independent,
+    activeSpecies,
+    diffusionCoefficients,
+    filmCoefficients,
+    inverseConductivity,
+    filmHeatResistance,
+    hasFilm: filmHeatResistance > 0 || filmCoefficients.some((value) => value !== 0),
+  };
+}

@@ -1,0 +1,147 @@
+import {
+  createResolutionLadder,
+  finestRung,
+  type ResolutionLadder,
+} from '../numerics/diffusion/resolution-ladder.js';
+import { CollocatedPellet } from './collocated-pellet.js';
+import { createFieldBasis, type FieldBasis } from './field-basis.js';
+import {
+  createPelletWork,
+  type PelletBulk,
+  type PelletInterior,
+  type PelletModel,
+  type PelletModelInput,
+  type PelletStatus,
+  type PelletWork,
+} from './pellet-model.js';
+
+/** Rung of the first solution: enough at moduli up to about 1, and the first review raises it where it is not. */
+const firstRung = 2;
+/** Errors below this fraction of the tolerance allow one rung less. */
+const generousFraction = 1e-4;
+/** Rates below this fraction of the largest need not be resolved to the relative tolerance. */
+const smallRateFraction = 1e-3;
+
+/**
+ * The full reaction–diffusion problem, solved on the coarsest grid of the ladder that meets the tolerance: the averages are compared with
+ * those on the next finer grid whenever {@link FullPellet.reviewResolution} is called.
+ */
+export class FullPellet implements PelletModel {
+  readonly work: PelletWork = createPelletWork();
+  private readonly input: PelletModelInput;
+  private readonly basis: FieldBasis;
+  private readonly ladder: ResolutionLadder;
+  private readonly made = new Map<number, CollocatedPellet>();
+  private rung = firstRung;
+  private current: CollocatedPellet;
+  private lastBulk: PelletBulk | undefined;
+
+  constructor(input: PelletModelInput) {
+    this.input = input;
+    this.basis = createFieldBasis(input);
+    this.ladder = createResolutionLadder(input.pellet.geometry.shapeExponent);
+    this.current = this.onRung(firstRung);
+  }
+
+  get averageRates(): Float64Array {
+    return this.current.averageRates;
+  }
+
+  get gradient(): Float64Array {
+    return this.current.gradient;
+  }
+
+  /** Solves on the present grid; where that fails, on finer ones, since a grid too coarse for a thin zone can overshoot below zero. */
+  solve(bulk: PelletBulk): PelletStatus {
+    this.lastBulk = bulk;
+    let status = this.current.solve(bulk);
+    for (let rung = this.rung + 1; status !== 'converged' && rung <= finestRung; rung++) {
+      if (status === 'rates_not_finite') break;
+      const finer = this.onRung(rung);
+      finer.reset();
+      status = finer.solve(bulk);
+      if (status === 'converged') this.use(rung);
+    }
+    return status;
+  }
+
+  differentiate(bulk: PelletBulk): PelletStatus {
+    const status = this.solve(bulk);
+    if (status !== 'converged') return status;
+    return this.current.differentiate(bulk) ? 'converged' : 'no_state';
+  }
+
+  surfaceTemperature(): number {
+    return this.stateAt(1).temperature;
+  }
+
+  centreTemperature(): number {
+    return this.stateAt(0).temperature;
+  }
+
+  interior(relativeRadii: Float64Array): PelletInterior {
+    const states = Array.from(relativeRadii, (radius) => this.stateAt(radius));
+    return {
+      relativeRadii,
+      concentrations: Array.from({ length: this.input.speciesCount }, (_, i) =>
+        Float64Array.from(states, ({ concentrations }) => concentrations[i]!),
+      ),
+      temperatures: Float64Array.from(states, ({ temperature }) => temperature),
+    };
+  }
+
+  reviewResolution(bulk: PelletBulk): 'adequate' | 'raised' {
+    const startRung = this.rung;
+    if (this.solve(bulk) !== 'converged') return this.rung > startRung ? 'raised' : 'adequate';
+    while (this.rung < finestRung) {
+      const coarse = this.current;
+      const fine = this.onRung(this.rung + 1);
+      fine.adopt(coarse);
+      const error =
+        fine.solve(bulk) === 'converged'
+          ? largestDifference(coarse.averageRates, fine.averageRates)
+          : Infinity;
+      if (error > this.input.tolerance) {
+        this.use(this.rung + 1);
+        if (this.solve(bulk) !== 'converged') break;
+        continue;
+      }
+      if (this.rung === startRung && this.rung > 0 && error < generousFraction * this.input.tolerance) {
+        const coarser = this.onRung(this.rung - 1);
+        coarser.adopt(coarse);
+        this.use(this.rung - 1);
+      }
+      break;
+    }
+    return this.rung > startRung ? 'raised' : 'adequate';
+  }
+
+  private stateAt(relativeRadius: number): { concentrations: Float64Array; temperature: number } {
+    if (!this.lastBulk) throw new Error('a pellet has no state before its first solution');
+    return this.current.stateAt(this.lastBulk, relativeRadius);
+  }
+
+  private onRung(rung: number): CollocatedPellet {
+    let pellet = this.made.get(rung);
+    if (!pellet) {
+      pellet = new CollocatedPellet(this.ladder.grid(rung), this.input, this.basis, this.work);
+      this.made.set(rung, pellet);
+    }
+    return pellet;
+  }
+
+  private use(rung: number): void {
+    this.rung = rung;
+    this.current = this.onRung(rung);
+  }
+}
+
+/** Largest relative difference; small rates are measured by the largest one. */
+function largestDifference(coarse: Float64Array, fine: Float64Array): number {
+  const largest = fine.reduce((most, rate) => Math.max(most, Math.abs(rate)), 0);
+  if (largest === 0) return 0;
+  return fine.reduce((worst, rate, j) => {
+    const scale = Math.max(Math.abs(rate), smallRateFraction * largest);
+    return Math.max(worst, Math.abs(coarse[j]! - rate) / scale);
+  }, 0);
+}
