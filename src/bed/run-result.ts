@@ -118,8 +118,8 @@ export interface RunResult {
   readonly peak: { readonly temperature: number; readonly position: number };
   /** Pa */
   readonly pressureDrop: number;
-  /** W given to the coolant, whole reactor; negative when the bed is heated. */
-  readonly heatRemoved: number;
+  /** W taken from the bed, whole reactor; negative when it is heated; null in an isothermal bed whose heats of reaction are unknown. */
+  readonly heatRemoved: number | null;
   /** kg, whole reactor */
   readonly catalystMass: number;
   readonly effectiveness: readonly EffectivenessSummary[];

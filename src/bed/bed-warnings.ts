@@ -1,0 +1,74 @@
+import type { Balances } from './balances.js';
+import type { ReactorModel } from './reactor-model.js';
+import type { Profile, RunResult } from './run-result.js';
+
+/** Balances that close worse than this deserve a word; rounding leaves about 1e-15. */
+const closureAlarm = 1e-9;
+/** Range of the friction law in Rem; below 1 the inertial term is negligible and the law stays right. @source Ergun (1952) */
+const frictionRange = { lowest: 1, highest: 2500 };
+/** Tube over pellet diameter below which the wall disturbs flow. @source common practice */
+const narrowTube = 10;
+
+/** What the run shows that its reader should know, in sentences; the gravest first. */
+export function bedWarnings(
+  model: ReactorModel,
+  balances: Balances,
+  profile: Profile,
+  closure: RunResult['balances'],
+  peakTemperature: number,
+): string[] {
+  const { specification } = model;
+  const { bed, limits, feed, pellet } = specification;
+  const warnings: string[] = [];
+  if (limits.temperature !== undefined && peakTemperature > limits.temperature) {
+    warnings.push(
+      `The temperature reaches ${peakTemperature.toFixed(1)} K, above the limit you set (${limits.temperature.toFixed(1)} K).`,
+    );
+  }
+  const pressureDrop = feed.pressure - profile.pressures.at(-1)!;
+  if (limits.pressureDrop !== undefined && pressureDrop > limits.pressureDrop) {
+    warnings.push(
+      `The pressure drop is ${bar(pressureDrop)}, above the limit you set (${bar(limits.pressureDrop)}).`,
+    );
+  }
+  if (closure.mass > closureAlarm) {
+    warnings.push(
+      `Mass closes only to ${closure.mass.toExponential(1)}: molar masses and stoichiometry do not quite agree; check the species records.`,
+    );
+  }
+  for (const [element, off] of Object.entries(closure.elements)) {
+    if (off > closureAlarm) warnings.push(`Element ${element} closes only to ${off.toExponential(1)}.`);
+  }
+  if (closure.energy > closureAlarm) {
+    warnings.push(`Energy closes only to ${closure.energy.toExponential(1)}.`);
+  }
+  const ratio = bed.tubeDiameter / pellet.geometry.sauterDiameter;
+  if (ratio < narrowTube) {
+    warnings.push(
+      `The tube is ${ratio.toFixed(1)} pellet diameters wide; below about ${narrowTube} gas passes along the wall and the friction law and plug flow are less sure (common practice).`,
+    );
+  }
+  if (balances.pressureIndex >= 0 && model.viscosity) {
+    const outside = reynoldsOutside(model, profile);
+    if (outside) warnings.push(outside);
+  }
+  return warnings;
+}
+
+function reynoldsOutside(model: ReactorModel, profile: Profile): string | undefined {
+  let lowest = Infinity;
+  let highest = 0;
+  profile.temperatures.forEach((temperature, row) => {
+    const viscosity = model.viscosity!.value(temperature, profile.pressures[row]!);
+    const value =
+      (model.massFlux * model.specification.pellet.geometry.sauterDiameter) / (viscosity * model.solidFraction);
+    lowest = Math.min(lowest, value);
+    highest = Math.max(highest, value);
+  });
+  if (lowest >= frictionRange.lowest && highest <= frictionRange.highest) return undefined;
+  return `The packed-bed Reynolds number runs from ${lowest.toPrecision(3)} to ${highest.toPrecision(3)}; the friction law was fitted for ${frictionRange.lowest} to ${frictionRange.highest} (Ergun 1952).`;
+}
+
+function bar(pressure: number): string {
+  return `${Number((pressure / 1e5).toPrecision(3))} bar`;
+}

@@ -1,0 +1,112 @@
+import type { PelletModel } from '../pellet/pellet-model.js';
+import type { Balances } from './balances.js';
+import type { ReactorModel } from './reactor-model.js';
+import type { PelletProfile, Profile } from './run-result.js';
+
+/** States of the bed at given positions: `states` is row-major `positions.length × state size`. */
+export interface BedStates {
+  readonly positions: Float64Array;
+  readonly states: Float64Array;
+}
+
+/** Profile and the sums along it that need the rates at bulk conditions. */
+export interface Tabulation {
+  readonly profile: Profile;
+  /** Rates at bulk conditions, mol/(m³ pellet s), one column per reaction. */
+  readonly bulkRates: readonly Float64Array[];
+  /** Averaged rates, same unit. */
+  readonly averageRates: readonly Float64Array[];
+}
+
+/** Works out every column of the profile from the states of the bed; flows are multiplied up to the whole reactor. */
+export function tabulate(model: ReactorModel, balances: Balances, { positions, states }: BedStates): Tabulation {
+  const { speciesCount, reactionCount, specification, rateFactors } = model;
+  const { tubes } = specification.bed;
+  const { density } = specification.pellet;
+  const rowCount = positions.length;
+  const size = balances.initialState.length;
+  const column = (): Float64Array => new Float64Array(rowCount);
+  const columns = (count: number): Float64Array[] => Array.from({ length: count }, column);
+  const temperatures = column();
+  const pressures = column();
+  const surfaceTemperatures = column();
+  const centreTemperatures = column();
+  const molarFlows = columns(speciesCount);
+  const moleFractions = columns(speciesCount);
+  const rates = columns(reactionCount);
+  const effectiveness = columns(reactionCount);
+  const bulkRates = columns(reactionCount);
+  const averageRates = columns(reactionCount);
+  const atBulk = new Float64Array(reactionCount);
+  const { conditions } = balances;
+
+  for (let row = 0; row < rowCount; row++) {
+    const isKnown = balances.unpack(states.subarray(row * size, (row + 1) * size));
+    const isSolved = isKnown && model.pellet.solve(conditions) === 'converged';
+    temperatures[row] = conditions.temperature;
+    pressures[row] = conditions.pressure;
+    surfaceTemperatures[row] = isSolved ? model.pellet.surfaceTemperature() : Number.NaN;
+    centreTemperatures[row] = isSolved ? model.pellet.centreTemperature() : Number.NaN;
+    for (let i = 0; i < speciesCount; i++) {
+      molarFlows[i]![row] = conditions.flows[i]! * tubes;
+      moleFractions[i]![row] = conditions.flows[i]! / conditions.totalFlow;
+    }
+    model.rates.evaluate(
+      conditions.concentrations,
+      0,
+      conditions.temperature,
+      conditions.pressure,
+      atBulk,
+      0,
+    );
+    for (let j = 0; j < reactionCount; j++) {
+      const bulk = atBulk[j]! * rateFactors[j]!;
+      const average = isSolved ? model.pellet.averageRates[j]! : Number.NaN;
+      bulkRates[j]![row] = bulk;
+      averageRates[j]![row] = average;
+      rates[j]![row] = average / density;
+      effectiveness[j]![row] = bulk === 0 ? Number.NaN : average / bulk;
+    }
+  }
+  const { heat } = specification;
+  return {
+    profile: {
+      positions,
+      temperatures,
+      pressures,
+      ...(heat.mode === 'cooled' && { coolantTemperatures: column().fill(heat.coolantTemperature) }),
+      molarFlows,
+      moleFractions,
+      rates,
+      effectiveness,
+      surfaceTemperatures,
+      centreTemperatures,
+    },
+    bulkRates,
+    averageRates,
+  };
+}
+
+/** Relative radii at which a pellet's inside is written out: denser towards the surface, where thin zones lie. */
+const interiorRadii = Float64Array.from({ length: 51 }, (_, k) => Math.sin((Math.PI / 2) * (k / 50)));
+
+/** The inside of the pellet at one state of the bed; undefined where no pellet state was found. */
+export function pelletProfile(
+  label: PelletProfile['label'],
+  position: number,
+  state: Float64Array,
+  balances: Balances,
+  pellet: PelletModel,
+): PelletProfile | undefined {
+  if (!balances.unpack(state) || pellet.solve(balances.conditions) !== 'converged') return undefined;
+  const interior = pellet.interior(interiorRadii);
+  return {
+    label,
+    position,
+    relativeRadii: interior.relativeRadii,
+    concentrations: interior.concentrations,
+    temperatures: interior.temperatures,
+    bulkConcentrations: [...balances.conditions.concentrations],
+    bulkTemperature: balances.conditions.temperature,
+  };
+}
