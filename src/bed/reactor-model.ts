@@ -7,11 +7,8 @@ import { createPelletModel } from '../pellet/create-pellet-model.js';
 import type { PelletModel } from '../pellet/pellet-model.js';
 import type { RateEvaluator } from '../kinetics/rate-evaluator.js';
 import { createPropertyFunction, type FluidPropertyFunction } from '../properties/fluid-property.js';
-import {
-  createEquilibriumConstant,
-  createSpeciesThermochemistry,
-  type SpeciesThermochemistry,
-} from '../properties/thermochemistry.js';
+import { createEquilibriumConstant } from '../properties/reaction-equilibrium.js';
+import { createSpeciesThermochemistry, type SpeciesThermochemistry } from '../properties/thermochemistry.js';
 import { frictionCoefficients, type FrictionCoefficients } from './friction.js';
 import { givenHeatContent, speciesHeatContent, type HeatContent } from './heat-content.js';
 import type { ReactorSpecification } from './reactor-specification.js';

@@ -1,12 +1,9 @@
-import type { CheckedFormula } from '../expressions/expression.js';
 import type { ReactionRecord } from '../kinetics/reaction-record.js';
 import type { PelletSpecification } from '../pellet/pellet-specification.js';
+import type { FluidProperty } from '../properties/fluid-property.js';
 import type { SpeciesRecord } from '../properties/species-record.js';
 
-/** A property of the fluid: a number, or a formula in temperature and pressure, SI. */
-export type FluidProperty =
-  | { readonly kind: 'constant'; readonly value: number }
-  | { readonly kind: 'formula'; readonly formula: CheckedFormula };
+export type { FluidProperty };
 
 /** Heat capacity of the mixture: from the species (mole-weighted), or given per mass J/(kg K) or per amount J/(mol K). */
 export type MixtureHeatCapacity =

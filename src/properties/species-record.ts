@@ -40,6 +40,17 @@ export interface SpeciesRecord {
   readonly heatCapacity?: HeatCapacityData;
   readonly enthalpyOfFormation?: number;
   readonly standardEntropy?: number;
+  /** K */
+  readonly criticalTemperature?: number;
+  /** Pa */
+  readonly criticalPressure?: number;
+  /** m³/mol */
+  readonly criticalVolume?: number;
+  readonly acentricFactor?: number;
+  /** C m */
+  readonly dipoleMoment?: number;
+  /** Diffusion volume of Fuller, Schettler and Giddings, dimensionless. */
+  readonly diffusionVolume?: number;
   /** Where the numbers come from: `own record in the case` or the library's sources, one line. */
   readonly source: string;
 }
