@@ -48,7 +48,8 @@ const pressureFloor = 1e-3;
 const temperatureIterations = 50;
 
 export function createBalances(model: ReactorModel): Balances {
-  const { speciesCount, reactionCount, stoichiometry, moleChanges, specification, heatContent, pellet } = model;
+  const { speciesCount, reactionCount, stoichiometry, moleChanges, specification, heatContent, pellet } =
+    model;
   const { feed, heat, bed } = specification;
   const isIsothermal = heat.mode === 'isothermal';
   const heatIndex = isIsothermal ? -1 : reactionCount;
@@ -130,7 +131,8 @@ export function createBalances(model: ReactorModel): Balances {
     const volumePerMass = (totalFlow * gasConstant * temperature) / massFlow; // P/ρ
     const viscousFlux = model.friction.viscous * massFlux;
     const group =
-      viscousFlux * model.viscosity.value(temperature, pressure) + model.friction.inertial * massFlux * massFlux;
+      viscousFlux * model.viscosity.value(temperature, pressure) +
+      model.friction.inertial * massFlux * massFlux;
     friction.slope = -2 * group * volumePerMass;
     friction.byTemperature =
       friction.slope / temperature -

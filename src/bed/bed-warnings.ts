@@ -61,7 +61,8 @@ function reynoldsOutside(model: ReactorModel, profile: Profile): string | undefi
   profile.temperatures.forEach((temperature, row) => {
     const viscosity = model.viscosity!.value(temperature, profile.pressures[row]!);
     const value =
-      (model.massFlux * model.specification.pellet.geometry.sauterDiameter) / (viscosity * model.solidFraction);
+      (model.massFlux * model.specification.pellet.geometry.sauterDiameter) /
+      (viscosity * model.solidFraction);
     lowest = Math.min(lowest, value);
     highest = Math.max(highest, value);
   });

@@ -10,7 +10,11 @@ import type { BedStates } from './tabulate.js';
  * shows here. Energy compares the heat content at the temperature found with the heat given away, relative to the larger of the
  * heat released and one kelvin's worth of the feed's heat capacity.
  */
-export function closures(model: ReactorModel, balances: Balances, { positions, states }: BedStates): RunResult['balances'] {
+export function closures(
+  model: ReactorModel,
+  balances: Balances,
+  { positions, states }: BedStates,
+): RunResult['balances'] {
   const { feedFlows, massFlow, molarMasses, specification, heatContent } = model;
   const { species } = specification;
   const size = balances.initialState.length;

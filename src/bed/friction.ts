@@ -44,5 +44,7 @@ export function pressureGradient(
   density: number,
   viscosity: number,
 ): number {
-  return (coefficients.viscous * viscosity * massFlux + coefficients.inertial * massFlux * massFlux) / density;
+  return (
+    (coefficients.viscous * viscosity * massFlux + coefficients.inertial * massFlux * massFlux) / density
+  );
 }

@@ -95,7 +95,8 @@ export function givenHeatContent(
         const span = temperature - referenceTemperature;
         let sum = 0;
         for (let q = 0; q < heatCapacityPoints; q++) {
-          sum += rule.weights[q]! * heatCapacity.value(referenceTemperature + span * rule.points[q]!, pressure);
+          sum +=
+            rule.weights[q]! * heatCapacity.value(referenceTemperature + span * rule.points[q]!, pressure);
         }
         return span * sum;
       };

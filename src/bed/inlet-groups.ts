@@ -131,7 +131,9 @@ function reactionGroups(model: ReactorModel, balances: Balances, j: number): Dim
   }
   push({
     name: 'Arrhenius number',
-    value: (byTemperature * temperature) / rate - sumOfOrders(gradient, j, columns, speciesCount, conditions.concentrations, rateFactors[j]!, rate),
+    value:
+      (byTemperature * temperature) / rate -
+      sumOfOrders(gradient, j, columns, speciesCount, conditions.concentrations, rateFactors[j]!, rate),
     unit: '1',
     definition: 'd ln r / d ln T at constant partial pressures; E/(R T) for an Arrhenius law',
     source: 'definition',

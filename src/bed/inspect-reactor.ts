@@ -13,5 +13,8 @@ export interface Inspection {
 /** Everything short of integrating: compiles the laws, sets up the balances and looks at the inlet. */
 export function inspectReactor(specification: ReactorSpecification): Inspection {
   const model = createReactorModel(specification);
-  return { groups: inletGroups(model, createBalances(model)), assumptions: collectAssumptions(specification) };
+  return {
+    groups: inletGroups(model, createBalances(model)),
+    assumptions: collectAssumptions(specification),
+  };
 }

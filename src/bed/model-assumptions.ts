@@ -35,7 +35,8 @@ const modelAssumptions: readonly ModelAssumption[] = [
   },
   {
     about: 'pellet.method',
-    statement: 'given effectiveness factors multiply the rates at bulk conditions; film and pore resistance are not computed',
+    statement:
+      'given effectiveness factors multiply the rates at bulk conditions; film and pore resistance are not computed',
     source: 'case: pellet.method',
     applies: ({ pellet }) => pellet.method.kind === 'fixed',
   },
@@ -63,7 +64,8 @@ const modelAssumptions: readonly ModelAssumption[] = [
     statement:
       'given heats of reaction hold at the feed temperature unless a temperature stands beside them; elsewhere they follow the heat capacity in use (Kirchhoff)',
     source: 'thermodynamic consistency with one heat content of the mixture',
-    applies: ({ reactions, heat }) => heat.mode !== 'isothermal' && reactions.some((reaction) => reaction.heat),
+    applies: ({ reactions, heat }) =>
+      heat.mode !== 'isothermal' && reactions.some((reaction) => reaction.heat),
   },
 ];
 

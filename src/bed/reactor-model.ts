@@ -123,7 +123,12 @@ function createHeatContent(
   const referenceTemperature = feed.temperature;
   const heats: number[] = [];
   for (const reaction of reactions) {
-    const heat = heatAt(reaction, referenceTemperature, fluid.heatCapacity.kind === 'species', thermochemistry);
+    const heat = heatAt(
+      reaction,
+      referenceTemperature,
+      fluid.heatCapacity.kind === 'species',
+      thermochemistry,
+    );
     if (heat === undefined) return undefined;
     heats.push(heat);
   }
@@ -139,7 +144,8 @@ function createHeatContent(
     );
   }
   const isComplete = thermochemistry.every(
-    (entry, i) => entry.hasHeatCapacity || (feed.molarFlows[i] === 0 && stoichiometry.every((row) => row[i] === 0)),
+    (entry, i) =>
+      entry.hasHeatCapacity || (feed.molarFlows[i] === 0 && stoichiometry.every((row) => row[i] === 0)),
   );
   return isComplete
     ? speciesHeatContent(thermochemistry, stoichiometry, heats, referenceTemperature)
@@ -160,7 +166,8 @@ function heatAt(
     involved.reduce((sum, { coefficient, species }) => sum + coefficient * species.enthalpy(at), 0);
   if (reaction.heat) {
     const { value, temperature: given } = reaction.heat;
-    const isShifted = given !== undefined && usesSpecies && involved.every(({ species }) => species.hasHeatCapacity);
+    const isShifted =
+      given !== undefined && usesSpecies && involved.every(({ species }) => species.hasHeatCapacity);
     return isShifted ? value + change(temperature) - change(given) : value;
   }
   return involved.every(({ species }) => species.hasEnthalpyOfFormation && species.hasHeatCapacity)

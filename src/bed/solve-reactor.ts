@@ -128,7 +128,9 @@ function findPeak(
     balances.unpack(state);
     return { position, state, temperature: balances.conditions.temperature };
   });
-  return candidates.reduce((best, candidate) => (candidate.temperature > best.temperature ? candidate : best));
+  return candidates.reduce((best, candidate) =>
+    candidate.temperature > best.temperature ? candidate : best,
+  );
 }
 
 function describeEvents(
@@ -201,16 +203,18 @@ function conversionsOf(model: ReactorModel, outletFlows: readonly number[]): Run
 
 function selectivitiesOf(model: ReactorModel, outletFlows: readonly number[]): RunResult['selectivities'] {
   const fed = model.specification.feed.molarFlows;
-  return model.specification.output.selectivities.map(({ productIndex, reactantIndex, productPerReactant }) => {
-    const made = (outletFlows[productIndex]! - fed[productIndex]!) / productPerReactant;
-    const used = fed[reactantIndex]! - outletFlows[reactantIndex]!;
-    return {
-      productIndex,
-      reactantIndex,
-      selectivity: used > 0 ? made / used : null,
-      yield: made / fed[reactantIndex]!,
-    };
-  });
+  return model.specification.output.selectivities.map(
+    ({ productIndex, reactantIndex, productPerReactant }) => {
+      const made = (outletFlows[productIndex]! - fed[productIndex]!) / productPerReactant;
+      const used = fed[reactantIndex]! - outletFlows[reactantIndex]!;
+      return {
+        productIndex,
+        reactantIndex,
+        selectivity: used > 0 ? made / used : null,
+        yield: made / fed[reactantIndex]!,
+      };
+    },
+  );
 }
 
 /** W, whole reactor; null where neither heats nor heat capacities are known. */

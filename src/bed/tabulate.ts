@@ -19,7 +19,11 @@ export interface Tabulation {
 }
 
 /** Works out every column of the profile from the states of the bed; flows are multiplied up to the whole reactor. */
-export function tabulate(model: ReactorModel, balances: Balances, { positions, states }: BedStates): Tabulation {
+export function tabulate(
+  model: ReactorModel,
+  balances: Balances,
+  { positions, states }: BedStates,
+): Tabulation {
   const { speciesCount, reactionCount, specification, rateFactors } = model;
   const { tubes } = specification.bed;
   const { density } = specification.pellet;

@@ -153,8 +153,7 @@ export class CollocatedPellet {
       for (let k = 0; k < fieldCount; k++) {
         for (let m = 0; m < nodeCount; m++) {
           const at = (m * fieldCount + k) * reactionCount + j;
-          if (m < unknownCount)
-            adjoint[k * unknownCount + m] = weights[m]! * this.sensitivityDiffusion[at]!;
+          if (m < unknownCount) adjoint[k * unknownCount + m] = weights[m]! * this.sensitivityDiffusion[at]!;
           if (hasFilm) adjoint[fieldCount * unknownCount + k]! += weights[m]! * this.sensitivityFilm[at]!;
         }
       }

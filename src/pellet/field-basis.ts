@@ -45,8 +45,7 @@ export function createFieldBasis(input: PelletModelInput): FieldBasis {
     activeSpecies.forEach((i) => {
       const coefficient = stoichiometry[reaction]![i]!;
       diffusionCoefficients[k * speciesCount + i] = coefficient / pellet.effectiveDiffusivities[i]!;
-      filmCoefficients[k * speciesCount + i] =
-        (coefficient * diffusionLength) / pellet.film.massTransfer[i]!;
+      filmCoefficients[k * speciesCount + i] = (coefficient * diffusionLength) / pellet.film.massTransfer[i]!;
     });
   });
   const isIsothermal = referenceHeats === undefined;

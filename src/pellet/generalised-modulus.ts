@@ -39,16 +39,7 @@ export function createGeneralisedModulusLaw(input: PelletModelInput): SurfaceLaw
       rates.evaluate(inside, 0, temperature, pressure, pathRates, 0);
       return pathRates[j]!;
     };
-    rates.evaluateWithGradient(
-      concentrations,
-      0,
-      temperature,
-      pressure,
-      surfaceRates,
-      0,
-      surfaceGradient,
-      0,
-    );
+    rates.evaluateWithGradient(concentrations, 0, temperature, pressure, surfaceRates, 0, surfaceGradient, 0);
     gradient?.fill(0);
     for (let j = 0; j < reactionCount; j++) {
       const row = stoichiometry[j]!;
@@ -78,12 +69,14 @@ export function createGeneralisedModulusLaw(input: PelletModelInput): SurfaceLaw
         integral += weight * pathRates[j]!;
       });
       if (end.limitingSpecies >= 0) {
-        const reach = Math.abs(pellet.effectiveDiffusivities[end.limitingSpecies]! / row[end.limitingSpecies]!);
-        integralGradient[end.limitingSpecies]! +=
-          rateOf(j, end.potential) * reach * Math.sign(end.potential);
+        const reach = Math.abs(
+          pellet.effectiveDiffusivities[end.limitingSpecies]! / row[end.limitingSpecies]!,
+        );
+        integralGradient[end.limitingSpecies]! += rateOf(j, end.potential) * reach * Math.sign(end.potential);
       }
       const modulus =
-        (diffusionLength * Math.abs(surfaceRate) * Math.sqrt(rateFactors[j]!)) / Math.sqrt(2 * Math.abs(integral));
+        (diffusionLength * Math.abs(surfaceRate) * Math.sqrt(rateFactors[j]!)) /
+        Math.sqrt(2 * Math.abs(integral));
       const { effectiveness, slope } = firstOrderEffectiveness(modulus, shapeExponent);
       averageRates[j] = rateFactors[j]! * effectiveness * surfaceRate;
       for (let column = 0; gradient && column < columns; column++) {

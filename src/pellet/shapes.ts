@@ -1,11 +1,7 @@
 import type { PelletGeometry } from './pellet-specification.js';
 
 /** What the one-dimensional problem needs of a body: volume over surface, and the exponent of its radial operator. */
-function geometry(
-  diffusionLength: number,
-  shapeExponent: number,
-  description: string,
-): PelletGeometry {
+function geometry(diffusionLength: number, shapeExponent: number, description: string): PelletGeometry {
   return { diffusionLength, shapeExponent, sauterDiameter: 6 * diffusionLength, description };
 }
 

@@ -13,7 +13,7 @@ export interface SolvedOde {
 export const solvedOdes: readonly SolvedOde[] = [
   {
     name: 'Prothero–Robinson, stiff',
-    source: 'Prothero & Robinson (1974), Math. Comp. 28, 145: y\' = λ(y - cos x) - sin x, λ = -10⁴',
+    source: "Prothero & Robinson (1974), Math. Comp. 28, 145: y' = λ(y - cos x) - sin x, λ = -10⁴",
     problem: {
       size: 1,
       evaluate: (x, y, f) => {

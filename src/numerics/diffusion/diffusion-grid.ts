@@ -148,7 +148,9 @@ export function elementGrid(
 function laplacianMatrix(nodes: Float64Array, shapeExponent: number): Matrix {
   const size = nodes.length;
   const first = new Matrix(size, size);
-  differentiationMatrix(nodes).forEach((value, index) => first.set(Math.floor(index / size), index % size, value));
+  differentiationMatrix(nodes).forEach((value, index) =>
+    first.set(Math.floor(index / size), index % size, value),
+  );
   const second = first.mmul(first);
   const laplacian = Matrix.zeros(size, size);
   for (let i = 0; i < size; i++) {

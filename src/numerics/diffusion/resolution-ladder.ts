@@ -19,7 +19,11 @@ const gradingRatio = 5;
  */
 const rungs: readonly Rung[] = [
   ...[3, 4, 5, 6, 8, 10, 13, 16, 20].map((nodes): Rung => ({ kind: 'single', nodes })),
-  ...[2, 3, 4, 5, 6].map((innerEnds): Rung => ({ kind: 'graded', nodesPerElement: 7 + innerEnds, innerEnds })),
+  ...[2, 3, 4, 5, 6].map((innerEnds): Rung => ({
+    kind: 'graded',
+    nodesPerElement: 7 + innerEnds,
+    innerEnds,
+  })),
 ];
 
 export const finestRung: number = rungs.length - 1;

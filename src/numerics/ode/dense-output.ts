@@ -28,7 +28,6 @@ export function interpolateInto(
   const size = startState.length;
   const [p1, p2, p3] = stagePolynomials(s);
   for (let i = 0; i < size; i++) {
-    target[i] =
-      startState[i]! + p1 * stages[i]! + p2 * stages[size + i]! + p3 * stages[2 * size + i]!;
+    target[i] = startState[i]! + p1 * stages[i]! + p2 * stages[size + i]! + p3 * stages[2 * size + i]!;
   }
 }

@@ -131,7 +131,9 @@ export function integrate(
       work.rejectedSteps++;
       previousStep = 0;
       afterRejection = true;
-      step *= Number.isNaN(error) ? failureShrink : stepFactor(error, step, outcome.iterations, false, history);
+      step *= Number.isNaN(error)
+        ? failureShrink
+        : stepFactor(error, step, outcome.iterations, false, history);
       continue;
     }
 
@@ -186,7 +188,8 @@ function firstStep(
   options: IntegrationOptions,
 ): number {
   const scale = state.map(
-    (value, i) => options.absoluteTolerances[i]! + options.relativeTolerance * Math.abs(value) || Number.MIN_VALUE,
+    (value, i) =>
+      options.absoluteTolerances[i]! + options.relativeTolerance * Math.abs(value) || Number.MIN_VALUE,
   );
   const speed = scaledRms(derivative, scale);
   const accurate = speed > 0 ? 1 / (speed * options.relativeTolerance ** 0.25) : Infinity;
@@ -251,7 +254,12 @@ function createCollector(options: IntegrationOptions, size: number): Collector {
     outputs.set(state, reached * size);
     reached++;
   };
-  const evaluateEvents = (x: number, state: Float64Array, derivative: Float64Array, target: Float64Array): void => {
+  const evaluateEvents = (
+    x: number,
+    state: Float64Array,
+    derivative: Float64Array,
+    target: Float64Array,
+  ): void => {
     options.events.forEach((event: EventFunction, k) => (target[k] = event.evaluate(x, state, derivative)));
   };
   return {

@@ -1,13 +1,7 @@
 import { factoriseComplexInPlace, solveComplexInPlace } from '../complex-lu.js';
 import { factoriseInPlace, solveInPlace } from '../dense-lu.js';
 import type { OdeProblem } from './problem.js';
-import {
-  complexEigenvalue,
-  inverseTransform,
-  realEigenvalue,
-  stagePositions,
-  transform,
-} from './tableau.js';
+import { complexEigenvalue, inverseTransform, realEigenvalue, stagePositions, transform } from './tableau.js';
 import type { OdeWorkspace } from './workspace.js';
 
 /** Iterations before a stage solution is given up and the step shortened. */

@@ -51,11 +51,7 @@ function buildTransform(): Matrix3 {
   const inverse = inverse3(stageMatrix);
   const real = nullVector(inverse, realEigenvalue, 0);
   const pair = nullVector(inverse, complexEigenvalue.realPart, complexEigenvalue.imaginaryPart);
-  return [0, 1, 2].map((row): [number, number, number] => [
-    real[row]![0],
-    pair[row]![0],
-    pair[row]![1],
-  ]);
+  return [0, 1, 2].map((row): [number, number, number] => [real[row]![0], pair[row]![0], pair[row]![1]]);
 }
 
 /** Eigenvector of a 3×3 matrix for a simple eigenvalue: the cross product of two rows of (matrix - eigenvalue I). Entries [re, im]. */
