@@ -218,7 +218,8 @@ export class CollocatedPellet {
       for (let n = 0; n < this.system.size; n++) this.unknowns[n]! -= this.change[n]!;
       const change = this.scaledChange();
       if (!(change < Infinity)) return 'no_state';
-      const contraction = change / previous;
+      // The first iteration cannot tell how well it contracts.
+      const contraction = iteration === 0 ? 1 : change / previous;
       const remaining = contraction < 1 ? (change * contraction) / (1 - contraction) : Infinity;
       if (change <= tolerance * 1e-3 || remaining <= tolerance) {
         // The averages are taken at the final unknowns.
@@ -226,7 +227,7 @@ export class CollocatedPellet {
       }
       worsenings = change > previous ? worsenings + 1 : 0;
       if (worsenings > patience) return 'no_state';
-      needsFactors = contraction > slowContraction;
+      needsFactors = iteration > 0 && contraction > slowContraction;
       previous = change;
     }
     return 'no_state';

@@ -19,6 +19,8 @@ import {
 const firstRung = 2;
 /** Errors below this fraction of the tolerance allow one rung less. */
 const generousFraction = 1e-4;
+/** Rungs above the one in use for showing the inside. */
+const interiorRungs = 2;
 /** Rates below this fraction of the largest need not be resolved to the relative tolerance. */
 const smallRateFraction = 1e-3;
 
@@ -79,8 +81,17 @@ export class FullPellet implements PelletModel {
     return this.stateAt(0).temperature;
   }
 
+  /** From a finer grid than the averages need: an average forgives ripples that a profile would show. */
   interior(relativeRadii: Float64Array): PelletInterior {
-    const states = Array.from(relativeRadii, (radius) => this.stateAt(radius));
+    if (!this.lastBulk) throw new Error('a pellet has no inside before its first solution');
+    const finer = this.onRung(Math.min(this.rung + interiorRungs, finestRung));
+    let shown = this.current;
+    if (finer !== this.current) {
+      finer.adopt(this.current);
+      if (finer.solve(this.lastBulk) === 'converged') shown = finer;
+    }
+    const bulk = this.lastBulk;
+    const states = Array.from(relativeRadii, (radius) => shown.stateAt(bulk, radius));
     return {
       relativeRadii,
       concentrations: Array.from({ length: this.input.speciesCount }, (_, i) =>

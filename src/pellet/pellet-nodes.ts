@@ -72,7 +72,8 @@ export class PelletNodes {
         const start = k * speciesCount;
         for (const i of activeSpecies) {
           concentrations[row + i]! +=
-            basis.diffusionCoefficients[start + i]! * potential + basis.filmCoefficients[start + i]! * average;
+            basis.diffusionCoefficients[start + i]! * potential +
+            basis.filmCoefficients[start + i]! * average;
         }
         temperature +=
           fieldHeats[k]! * (basis.inverseConductivity * potential + basis.filmHeatResistance * average);
