@@ -27,7 +27,10 @@ export function findReactionBasis(
   const independent: number[] = [];
   const columns: number[][] = [];
   rows.forEach((row, j) => {
-    const coefficients = combine(independent.map((index) => rows[index]!), row);
+    const coefficients = combine(
+      independent.map((index) => rows[index]!),
+      row,
+    );
     if (coefficients) columns.push(coefficients);
     else {
       columns.push([...independent.map(() => 0), 1]);
@@ -48,7 +51,9 @@ function combine(rows: readonly number[][], target: readonly number[]): number[]
   if (rows.length === 0) return undefined;
   const matrix = new Matrix(rows.map((row) => [...row])).transpose();
   const solution = solve(matrix, Matrix.columnVector([...target]), true).to1DArray();
-  const remainder = target.map((value, i) => value - rows.reduce((sum, row, k) => sum + row[i]! * solution[k]!, 0));
+  const remainder = target.map(
+    (value, i) => value - rows.reduce((sum, row, k) => sum + row[i]! * solution[k]!, 0),
+  );
   if (Math.hypot(...remainder) > relativeTolerance * size) return undefined;
   return solution.map((value) => (Math.abs(value - Math.round(value)) < 1e-11 ? Math.round(value) : value));
 }

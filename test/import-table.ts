@@ -1,0 +1,63 @@
+/**
+ * Who may import whom under src/. Folders are listed from the bottom up; each may import itself and those above it in this list,
+ * and of packages only what stands beside it. `DEVELOPERS.md` repeats the table and is compared with it.
+ */
+export interface FolderRule {
+  readonly folder: string;
+  readonly holds: string;
+  readonly packages: readonly string[];
+}
+
+export const importTable: readonly FolderRule[] = [
+  {
+    folder: 'diagnostics',
+    holds: 'faults and problems as records, and the text made from them',
+    packages: [],
+  },
+  {
+    folder: 'numerics',
+    holds:
+      'linear algebra, quadrature, roots, the stiff integrator, the diffusion operator; knows no chemistry',
+    packages: ['ml-matrix'],
+  },
+  {
+    folder: 'quantities',
+    holds: 'dimensions, units, text with a unit to SI, constants of nature',
+    packages: ['fastest-levenshtein'],
+  },
+  {
+    folder: 'expressions',
+    holds: 'formulas: text to a checked tree, derivatives, generated code',
+    packages: ['fastest-levenshtein', 'mathjs'],
+  },
+  { folder: 'properties', holds: 'species data, thermochemistry, fluid properties', packages: [] },
+  {
+    folder: 'kinetics',
+    holds: 'reaction equations, element balance, rate laws compiled, independent reactions',
+    packages: ['fastest-levenshtein', 'ml-matrix'],
+  },
+  { folder: 'pellet', holds: 'shapes, reaction and diffusion in one pellet, film', packages: [] },
+  { folder: 'bed', holds: 'axial balances, friction, heat, events, the result', packages: [] },
+  {
+    folder: 'case',
+    holds: 'case files: YAML, schema, checks, building the specification',
+    packages: ['fastest-levenshtein', 'yaml', 'zod'],
+  },
+  {
+    folder: 'output',
+    holds: 'result to text, tables, CSV, charts',
+    packages: [
+      'chart.js',
+      'chartjs-node-canvas',
+      'cli-table3',
+      'csv-stringify',
+      'dejavu-fonts-ttf',
+      'picocolors',
+    ],
+  },
+  {
+    folder: 'cli',
+    holds: 'commands, files, exit status; alone touches process, console and the file system',
+    packages: ['picocolors', 'yargs'],
+  },
+];
