@@ -5,7 +5,7 @@ Written apart from the program and by other means: all reacting species and the 
 stoichiometric reduction), discretised by even Chebyshev collocation; the axial equations go through SciPy's LSODA and DOP853.
 Both pellet resolution and axial method are varied; the differences are in the output under "agreement".
 
-    python3 cooled-bed.py > cooled-bed.json
+    python3 cooled-bed.py > cooled-bed.json && npx prettier --write cooled-bed.json
 
 Pellet, sphere of radius R (constant diffusivities and conductivity):
     De_i  (1/r^2) d/dr(r^2 dc_i/dr) = -sum_j nu_ij r_j        De_i dc_i/dr = kc_i (c_i,bulk - c_i)     at r = R
@@ -23,6 +23,8 @@ import sys
 import numpy as np
 import scipy
 from scipy.integrate import solve_ivp
+
+from even_chebyshev import EvenGrid
 
 R_GAS = 8.314462618
 BAR = 1e5
@@ -64,19 +66,6 @@ INPUTS = {
 }
 
 
-def chebyshev(count):
-    """Chebyshev-Lobatto points x_j = cos(j pi/n) on [-1, 1] and the differentiation matrix (Trefethen 2000, ch. 6)."""
-    n = count - 1
-    x = np.cos(np.pi * np.arange(count) / n)
-    c = np.ones(count)
-    c[[0, -1]] = 2.0
-    c *= (-1.0) ** np.arange(count)
-    dx = x[:, None] - x[None, :]
-    d = np.outer(c, 1 / c) / (dx + np.eye(count))
-    d -= np.diag(d.sum(axis=1))
-    return x, d
-
-
 class Pellet:
     """Even Chebyshev collocation on 0 < x <= 1, x = r/R; unknowns c of five species and T at every point, point 0 is the surface."""
 
@@ -102,27 +91,15 @@ class Pellet:
             ]
         )
         n = self.points = points
-        x, d = chebyshev(2 * n)
-        d2 = d @ d
-        fold = lambda m: m[:n, :n] + m[:n, n:][:, ::-1]
-        self.x = x[:n]
-        self.first = fold(d)
-        laplacian = fold(d2) + (2 / self.x)[:, None] * self.first
-        # Fields scaled alike: rows of the linear part, field by field.
+        grid = self.grid = EvenGrid(points, 2)
+        # Linear part, field by field; the first row of each block is the film condition.
         size = 6 * n
         self.linear = np.zeros((size, size))
         for f in range(6):
-            block = self.diffusion[f] / self.radius**2 * laplacian
-            block[0] = self.diffusion[f] / self.radius * self.first[0]
+            block = self.diffusion[f] / self.radius**2 * grid.laplacian
+            block[0] = self.diffusion[f] / self.radius * grid.first[0]
             block[0, 0] += self.film[f]
             self.linear[f * n : (f + 1) * n, f * n : (f + 1) * n] = block
-        # <g> = 3 int g x^2 dx: interpolatory weights on the even grid, from exact moments of the even Chebyshev polynomials.
-        k = np.arange(n)
-        basis = np.cos(2 * k[:, None] * np.arccos(self.x)[None, :])
-        xq, wq = np.polynomial.legendre.leggauss(4 * n)
-        xq, wq = (xq + 1) / 2, wq / 2
-        moments = np.cos(2 * k[:, None] * np.arccos(xq)[None, :]) @ (wq * 3 * xq**2)
-        self.average = np.linalg.solve(basis, moments)
         self.sources = np.vstack([self.nu.T, self.heat])  # 6 x 3
         self.state = None
         self.solves = 0
@@ -174,7 +151,7 @@ class Pellet:
             raise RuntimeError("pellet not converged")
         self.state = y
         fields = y.reshape(6, n)
-        return self.rates(fields[:5], fields[5])[0] @ self.average
+        return self.rates(fields[:5], fields[5])[0] @ self.grid.average
 
     def bulk_rates(self, bulk, temperature):
         return self.rates(np.asarray(bulk)[:, None], np.array([temperature]))[0][:, 0]
@@ -252,10 +229,7 @@ def solve_bed(inputs, points, method, rtol):
         bulk, temperature = bulk_of(y)
         pellet.solve(bulk, temperature)
         field = pellet.state.reshape(6, -1)[5]
-        # The even interpolant at x = 0 from its Chebyshev coefficients.
-        k = np.arange(pellet.points)
-        basis = np.cos(2 * np.arccos(pellet.x)[:, None] * k[None, :])
-        return float(field[0]), float(np.linalg.solve(basis, field) @ np.cos(np.pi * k))
+        return float(field[0]), float(pellet.grid.centre @ field)
 
     atoms = {"C": [8, 8, 0, 0, 1, 0], "H": [10, 4, 0, 2, 0, 0], "O": [0, 3, 2, 1, 2, 0]}
     rows = []
