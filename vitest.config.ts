@@ -1,9 +1,10 @@
-import { defineConfig } from 'vitest/config';
+import { defineConfig, type ViteUserConfig } from 'vitest/config';
 
-export default defineConfig({
+const config: ViteUserConfig = defineConfig({
   test: {
     include: ['test/**/*.test.ts'],
     benchmark: { include: ['test/bench/**/*.bench.ts'] },
     testTimeout: 30_000,
   },
 });
+export default config;
