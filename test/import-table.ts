@@ -23,25 +23,25 @@ export const importTable: readonly FolderRule[] = [
   {
     folder: 'quantities',
     holds: 'dimensions, units, text with a unit to SI, constants of nature',
-    packages: ['fastest-levenshtein'],
+    packages: [],
   },
   {
     folder: 'expressions',
     holds: 'formulas: text to a checked tree, derivatives, generated code',
-    packages: ['fastest-levenshtein', 'mathjs'],
+    packages: ['mathjs'],
   },
   { folder: 'properties', holds: 'species data, thermochemistry, fluid properties', packages: [] },
   {
     folder: 'kinetics',
     holds: 'reaction equations, element balance, rate laws compiled, independent reactions',
-    packages: ['fastest-levenshtein', 'ml-matrix'],
+    packages: ['ml-matrix'],
   },
   { folder: 'pellet', holds: 'shapes, reaction and diffusion in one pellet, film', packages: [] },
   { folder: 'bed', holds: 'axial balances, friction, heat, events, the result', packages: [] },
   {
     folder: 'case',
     holds: 'case files: YAML, schema, checks, building the specification',
-    packages: ['fastest-levenshtein', 'yaml', 'zod'],
+    packages: ['yaml', 'zod'],
   },
   {
     folder: 'output',

@@ -4,6 +4,8 @@ import type { Profile, RunResult } from './run-result.js';
 
 /** Balances that close worse than this deserve a word; rounding leaves about 1e-15. */
 const closureAlarm = 1e-9;
+/** Molar masses typed to five digits leave this much; more means that one of them is wrong. */
+const massAlarm = 1e-5;
 /** Range of the friction law in Rem; below 1 the inertial term is negligible and the law stays right. @source Ergun (1952) */
 const frictionRange = { lowest: 1, highest: 2500 };
 /** Tube over pellet diameter below which the wall disturbs flow. @source common practice */
@@ -31,7 +33,7 @@ export function bedWarnings(
       `The pressure drop is ${bar(pressureDrop)}, above the limit you set (${bar(limits.pressureDrop)}).`,
     );
   }
-  if (closure.mass > closureAlarm) {
+  if (closure.mass > massAlarm) {
     warnings.push(
       `Mass closes only to ${closure.mass.toExponential(1)}: molar masses and stoichiometry do not quite agree; check the species records.`,
     );

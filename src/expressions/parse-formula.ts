@@ -2,8 +2,8 @@
  * Text of a rate law or property formula to a checked expression in SI. mathjs parses; nothing of its tree is ever evaluated: a walk takes
  * over what the case format allows, resolves every name, reads numbers with units and checks dimensions on the way.
  */
-import { distance } from 'fastest-levenshtein';
 import { create, parseDependencies, type MathNode } from 'mathjs/number';
+import { didYouMean } from '../diagnostics/nearest-name.js';
 import type { ProblemCode, ReportFault, Span } from '../diagnostics/problem.js';
 import { gasConstant } from '../quantities/constants.js';
 import {
@@ -249,7 +249,7 @@ class Walk {
       token,
       `\`${name}\`, which is not defined`,
       `one of ${names.map((entry) => `\`${entry}\``).join(', ')}`,
-      suggestion(name, names) ?? `define it under \`constants\``,
+      didYouMean(name, names) ?? `define it under \`constants\``,
     );
   }
 
@@ -278,7 +278,7 @@ class Walk {
         token,
         `\`${property}\`, which is no species of this case`,
         `one of ${this.scope.speciesIds.join(', ')}`,
-        suggestion(property, this.scope.speciesIds),
+        didYouMean(property, this.scope.speciesIds),
       );
     }
     if (mapName === 'f') {
@@ -337,7 +337,7 @@ class Walk {
         token,
         `\`${name}(…)\``,
         `one of the functions ${functionNames.join(', ')}`,
-        isConstant ? `write \`${name} * (…)\` for a product` : suggestion(name, functionNames),
+        isConstant ? `write \`${name} * (…)\` for a product` : didYouMean(name, functionNames),
       );
     }
     const operands = node.args.map((argument) => this.visit(argument));
@@ -602,15 +602,6 @@ function isPlainNumber(node: MathNode): boolean {
     return isPlainNumber((node as unknown as { content: MathNode }).content);
   const { fn, args } = node as unknown as OperatorLike;
   return node.type === 'OperatorNode' && fn === 'unaryMinus' && isPlainNumber(args[0]!);
-}
-
-function suggestion(name: string, names: readonly string[]): string | undefined {
-  const best = names
-    .map((entry) => ({ entry, far: distance(entry.toLowerCase(), name.toLowerCase()) }))
-    .sort((a, b) => a.far - b.far)[0];
-  return best && best.far <= Math.max(1, Math.floor(name.length / 3))
-    ? `did you mean \`${best.entry}\`?`
-    : undefined;
 }
 
 function isFinite(expression: Expression): boolean {

@@ -1,5 +1,5 @@
 /** Reaction equations as text: `A + 10.5 O2 -> 8 CO2 + 5 H2O`, `CO + H2O <=> CO2 + H2`, `N2 + 3 H2 <=> 2 NH3`, `1/2 O2 + SO2 <=> SO3`. */
-import { distance } from 'fastest-levenshtein';
+import { didYouMean } from '../diagnostics/nearest-name.js';
 import type { ProblemCode, ReportFault } from '../diagnostics/problem.js';
 
 export interface ParsedEquation {
@@ -77,7 +77,7 @@ export function parseEquation(
           termEnd,
           `\`${name!}\`, which is no species of this case`,
           `one of ${speciesIds.join(', ')}`,
-          suggestion(name!, speciesIds),
+          didYouMean(name!, speciesIds),
         );
         continue;
       }
@@ -110,13 +110,4 @@ export function parseEquation(
     );
   }
   return isSound ? { stoichiometry, isReversible: arrow[0] === '<=>' } : undefined;
-}
-
-function suggestion(name: string, names: readonly string[]): string | undefined {
-  const best = names
-    .map((entry) => ({ entry, far: distance(entry.toLowerCase(), name.toLowerCase()) }))
-    .sort((a, b) => a.far - b.far)[0];
-  return best && best.far <= Math.max(1, Math.floor(name.length / 3))
-    ? `did you mean \`${best.entry}\`?`
-    : undefined;
 }

@@ -55,6 +55,8 @@ export class CollocatedPellet {
   /** How far each field's φ, then each <q>, may move before it matters. */
   private readonly scales: Float64Array;
   private readonly temperatureShifts: Float64Array;
+  private centreCoefficients: Float64Array | undefined;
+  private readonly transfers = new Map<DiffusionGrid, readonly Float64Array[]>();
   private hasFactors = false;
   private hasSolution = false;
 
@@ -102,10 +104,10 @@ export class CollocatedPellet {
   adopt(other: CollocatedPellet): void {
     const { fieldCount } = this.basis;
     const { unknownCount } = this.grid;
+    const rows = this.transferFrom(other.grid);
     for (let n = 0; n < unknownCount; n++) {
-      const coefficients = other.grid.interpolationAt(this.grid.positions[n]!);
       for (let k = 0; k < fieldCount; k++) {
-        const value = weightedSum(coefficients, other.unknowns, k * other.grid.unknownCount);
+        const value = weightedSum(rows[n]!, other.unknowns, k * other.grid.unknownCount);
         this.unknowns[k * unknownCount + n] = value;
       }
     }
@@ -158,6 +160,23 @@ export class CollocatedPellet {
     return true;
   }
 
+  /** K, at the surface (film alone) and at the centre; of the last solution. */
+  temperatureAt(bulk: PelletBulk, place: 'surface' | 'centre'): number {
+    const { fieldCount, inverseConductivity, filmHeatResistance } = this.basis;
+    this.centreCoefficients ??= this.grid.interpolationAt(0);
+    let temperature = bulk.temperature;
+    for (let k = 0; k < fieldCount; k++) {
+      const potential =
+        place === 'centre'
+          ? weightedSum(this.centreCoefficients, this.unknowns, k * this.grid.unknownCount)
+          : 0;
+      temperature +=
+        this.fieldHeats[k]! *
+        (inverseConductivity * potential + filmHeatResistance * this.averageSources[k]!);
+    }
+    return temperature;
+  }
+
   /** Concentrations and temperature at a relative radius, from the last solution. */
   stateAt(bulk: PelletBulk, relativeRadius: number): { concentrations: Float64Array; temperature: number } {
     const { speciesCount } = this.input;
@@ -176,6 +195,18 @@ export class CollocatedPellet {
       temperature += this.fieldHeats[k]! * (inverseConductivity * potential + filmHeatResistance * average);
     }
     return { concentrations, temperature };
+  }
+
+  /** Interpolation from another grid to this one's nodes, worked out once. */
+  private transferFrom(grid: DiffusionGrid): readonly Float64Array[] {
+    let rows = this.transfers.get(grid);
+    if (!rows) {
+      rows = Array.from({ length: this.grid.unknownCount }, (_, n) =>
+        grid.interpolationAt(this.grid.positions[n]!),
+      );
+      this.transfers.set(grid, rows);
+    }
+    return rows;
   }
 
   private prepare(bulk: PelletBulk): void {

@@ -74,23 +74,22 @@ export class FullPellet implements PelletModel {
   }
 
   surfaceTemperature(): number {
-    return this.stateAt(1).temperature;
+    return this.current.temperatureAt(this.solvedBulk(), 'surface');
   }
 
   centreTemperature(): number {
-    return this.stateAt(0).temperature;
+    return this.current.temperatureAt(this.solvedBulk(), 'centre');
   }
 
   /** From a finer grid than the averages need: an average forgives ripples that a profile would show. */
   interior(relativeRadii: Float64Array): PelletInterior {
-    if (!this.lastBulk) throw new Error('a pellet has no inside before its first solution');
+    const bulk = this.solvedBulk();
     const finer = this.onRung(Math.min(this.rung + interiorRungs, finestRung));
     let shown = this.current;
     if (finer !== this.current) {
       finer.adopt(this.current);
-      if (finer.solve(this.lastBulk) === 'converged') shown = finer;
+      if (finer.solve(bulk) === 'converged') shown = finer;
     }
-    const bulk = this.lastBulk;
     const states = Array.from(relativeRadii, (radius) => shown.stateAt(bulk, radius));
     return {
       relativeRadii,
@@ -127,9 +126,9 @@ export class FullPellet implements PelletModel {
     return this.rung > startRung ? 'raised' : 'adequate';
   }
 
-  private stateAt(relativeRadius: number): { concentrations: Float64Array; temperature: number } {
+  private solvedBulk(): PelletBulk {
     if (!this.lastBulk) throw new Error('a pellet has no state before its first solution');
-    return this.current.stateAt(this.lastBulk, relativeRadius);
+    return this.lastBulk;
   }
 
   private onRung(rung: number): CollocatedPellet {

@@ -3,7 +3,7 @@
  * exponents signed decimals behind `^` (or the superscripts ² and ³), parentheses. After a slash a product must stand in parentheses:
  * `J/mol K` is read by some as J K/mol and by others as J/(mol K), so it is refused.
  */
-import { distance } from 'fastest-levenshtein';
+import { didYouMean } from '../diagnostics/nearest-name.js';
 import type { ReportFault } from '../diagnostics/problem.js';
 import {
   dimensionless,
@@ -122,13 +122,12 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
         ...(unit.offset !== undefined && { offset: unit.offset }),
       };
     }
-    const suggestion = nearestUnit(token.text);
     return fault(
       token.start,
       token.end,
       `\`${token.text}\``,
       'a unit that is known here',
-      suggestion && `did you mean \`${suggestion}\`?`,
+      didYouMean(token.text, unitSymbols),
     );
   };
 
@@ -216,12 +215,4 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
     );
   }
   return result;
-}
-
-function nearestUnit(name: string): string | undefined {
-  const ranked = unitSymbols
-    .map((symbol) => ({ symbol, far: distance(symbol.toLowerCase(), name.toLowerCase()) }))
-    .sort((a, b) => a.far - b.far);
-  const best = ranked[0];
-  return best && best.far <= Math.max(1, Math.floor(name.length / 3)) ? best.symbol : undefined;
 }
