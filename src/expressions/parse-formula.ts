@@ -89,7 +89,7 @@ export function parseFormula(
     return undefined;
   }
   try {
-    const typed = new Walk(text, tokens, scope).visit(tree);
+    const typed = new Walk(text, tokens, scope).whole(tree);
     if (!isFinite(typed.expression)) {
       throw new FormulaFault(
         'bad_formula',
@@ -152,7 +152,16 @@ class Walk {
     this.scope = scope;
   }
 
-  visit(node: MathNode): Typed {
+  /** The whole formula; nothing of the text may be left over, or the tree is not what the text says. */
+  whole(tree: MathNode): Typed {
+    const typed = this.visit(tree);
+    const rest = this.nextLeaf();
+    if (rest >= 0)
+      throw this.unsupported(`\`${this.tokens[rest]!.text}\` there`, 'numbers and names in order');
+    return typed;
+  }
+
+  private visit(node: MathNode): Typed {
     switch (node.type) {
       case 'ConstantNode':
         return this.constant();
@@ -407,6 +416,7 @@ class Walk {
         };
       }
     }
+    if (name === 'divide') this.requireOneReading(node.args[1]!);
     const right = this.visit(node.args[1]!);
     const span = { start: left.span.start, end: right.span.end };
     const result = (dimension: Dimension): Typed => ({
@@ -462,9 +472,7 @@ class Walk {
   ): { factor: number; dimension: Dimension; end: number } | undefined {
     const leaves = symbolsOf(node);
     if (!leaves || leaves.length === 0) return undefined;
-    const isName = (name: string): boolean =>
-      this.scope.constants.has(name) || ['T', 'P', 'R', 'K_eq'].includes(name);
-    const known = leaves.find((name) => isName(name));
+    const known = leaves.find((name) => this.isName(name));
     if (known !== undefined) {
       if (isImplicit && this.scope.constants.has(known) && findUnit(known)) {
         const token = this.tokens.slice(this.next).find(({ text }) => text === known)!;
@@ -482,7 +490,10 @@ class Walk {
     if (strange !== undefined) return undefined;
     const scale = leaves.find((name) => findUnit(name)!.offset !== undefined);
     if (scale !== undefined) {
-      const token = this.tokens.slice(this.next).find(({ text }) => text === scale) ?? this.whole();
+      const token = this.tokens.slice(this.next).find(({ text }) => text === scale) ?? {
+        start: 0,
+        end: this.text.length,
+      };
       throw new FormulaFault(
         'unknown_unit',
         token,
@@ -492,6 +503,11 @@ class Walk {
       );
     }
     return this.unit(node);
+  }
+
+  /** Whether the name means something besides a unit. */
+  private isName(name: string): boolean {
+    return this.scope.constants.has(name) || ['T', 'P', 'R', 'K_eq'].includes(name);
   }
 
   private unit(node: MathNode): { factor: number; dimension: Dimension; end: number } {
@@ -522,6 +538,25 @@ class Walk {
     };
   }
 
+  /**
+   * `k / 2 T` divides by 2 T to mathjs and by 2 to many a reader: behind a slash a product without a sign is a number with one unit, or refused.
+   */
+  private requireOneReading(divisor: MathNode): void {
+    const { implicit, args } = divisor as unknown as Partial<OperatorLike>;
+    if (divisor.type !== 'OperatorNode' || implicit !== true || !args) return;
+    const units = symbolsOf(args[1]!);
+    const isNumberWithUnit =
+      isPlainNumber(args[0]!) && units?.length === 1 && findUnit(units[0]!) && !this.isName(units[0]!);
+    if (isNumberWithUnit) return;
+    throw new FormulaFault(
+      'bad_formula',
+      this.tokens[this.nextLeaf()] ?? { start: 0, end: this.text.length },
+      'a product without a sign behind a slash, which can be read in two ways',
+      'one reading',
+      'put the divisor in parentheses, or write `*` and `/`',
+    );
+  }
+
   private requireSame(left: Typed, right: Typed, how: string): void {
     if (sameDimension(left.dimension, right.dimension)) return;
     throw new FormulaFault(
@@ -539,25 +574,27 @@ class Walk {
     return `\`${shown}\` (${isDimensionless(typed.dimension) ? 'a pure number' : formatDimension(typed.dimension)})`;
   }
 
+  /** The next number or name, if it is the one asked for: a tree that leaves any out was not read as the text stands. */
   private take(kind: FormulaToken['kind'], text?: string): FormulaToken | undefined {
-    for (let k = this.next; k < this.tokens.length; k++) {
-      const token = this.tokens[k]!;
-      if (token.kind === kind && (text === undefined || token.text === text)) {
-        this.next = k + 1;
-        return token;
-      }
-    }
-    return undefined;
+    const at = this.nextLeaf();
+    const token = this.tokens[at];
+    if (token?.kind !== kind || (text !== undefined && token.text !== text)) return undefined;
+    this.next = at + 1;
+    return token;
   }
 
-  private whole(): Span {
-    return { start: 0, end: this.text.length };
+  /** Index of the next number or name; -1 when there is none. */
+  private nextLeaf(): number {
+    for (let at = this.next; at < this.tokens.length; at++) {
+      if (this.tokens[at]!.kind !== 'mark') return at;
+    }
+    return -1;
   }
 
   private unsupported(found: string, expected: string): FormulaFault {
     return new FormulaFault(
       'bad_formula',
-      this.tokens[Math.min(this.next, this.tokens.length - 1)] ?? this.whole(),
+      this.tokens[this.nextLeaf()] ?? this.tokens.at(-1)!,
       found,
       expected,
     );
@@ -613,8 +650,11 @@ function isFinite(expression: Expression): boolean {
     case 'negate':
     case 'unary':
       return isFinite(expression.operand);
-    case 'binary':
-      return isFinite(expression.left) && isFinite(expression.right);
+    case 'binary': {
+      const { name, left, right } = expression;
+      const dividesByZero = name === 'divide' && right.kind === 'number' && right.value === 0;
+      return !dividesByZero && isFinite(left) && isFinite(right);
+    }
   }
 }
 

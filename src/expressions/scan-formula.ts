@@ -88,8 +88,16 @@ export function scanFormula(text: string, report: ReportFault): FormulaToken[] |
     const groups = match.groups!;
     const kind = (['number', 'name', 'mark'] as const).find((name) => groups[name] !== undefined);
     if (!kind) continue;
-    if (kind === 'number' && !Number.isFinite(Number(match[0]))) {
-      return refuse(start, end, `the number ${match[0]}`, 'a number that a computer can hold');
+    if (kind === 'number') {
+      const value = Number(match[0]);
+      const isLost = value === 0 && /[1-9]/.test(match[0].split(/[eE]/)[0]!);
+      if (!Number.isFinite(value) || isLost) {
+        return refuse(start, end, `the number ${match[0]}`, 'a number that a computer can hold');
+      }
+      // The parser behind would take these for hexadecimal, binary and octal numbers.
+      if (match[0] === '0' && /[xbo]/i.test(text.slice(end, end + 1))) {
+        return refuse(start, end + 1, `\`${text.slice(start, end + 1)}\``, 'decimal numbers');
+      }
     }
     if (match[0] === '(' && ++depth > deepest) {
       return refuse(

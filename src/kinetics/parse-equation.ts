@@ -28,7 +28,9 @@ export function parseEquation(
     mend?: string,
   ): void => {
     isSound = false;
-    const span = { start, end: Math.max(end, start + 1) };
+    // Where nothing stands, the character before the end of the text is shown.
+    const shown = Math.max(0, Math.min(start, text.length - 1));
+    const span = { start: shown, end: Math.max(end, shown + 1) };
     report({ code, severity: 'error', span, found, expected, ...(mend !== undefined && { mend }) });
   };
   const shape = 'an equation such as `A + 3 O2 -> P + 3 H2O`';

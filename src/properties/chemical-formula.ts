@@ -99,6 +99,7 @@ export function parseChemicalFormula(text: string, report: ReportFault): Record<
     } else if (close !== undefined) {
       if (groups.length === 1) return refuse(start, start + 1, 'a parenthesis too many');
       last = groups.pop()!;
+      if (last.size === 0) return refuse(start, start + 1, 'empty parentheses');
       addTo(groups.at(-1)!, last, 1);
     } else {
       const factor = Number(count);

@@ -1,4 +1,4 @@
-import type { ReportFault } from '../diagnostics/problem.js';
+import type { ReportFault, Span } from '../diagnostics/problem.js';
 import { dimensionless, formatDimension, sameDimension, type Dimension } from './dimension.js';
 import { parseUnit, type ParsedUnit } from './parse-unit.js';
 import type { QuantityKind } from './quantity-kinds.js';
@@ -52,6 +52,10 @@ export function parseQuantity<Kind extends QuantityKind>(
     });
     return undefined;
   }
+  if (unit.offset !== undefined && !kind.isTemperature) {
+    reportScale(split.unitText, unitSpan, report);
+    return undefined;
+  }
   return { value: toSi(split.number, unit), kind };
 }
 
@@ -65,7 +69,23 @@ export function parseAnyQuantity(
   if (split.unitText === '') return { value: split.number, dimension: dimensionless };
   const unit = parseUnit(split.unitText, report, split.unitOffset);
   if (!unit) return undefined;
+  if (unit.offset !== undefined) {
+    reportScale(split.unitText, { start: split.unitOffset, end: text.length }, report);
+    return undefined;
+  }
   return { value: toSi(split.number, unit), dimension: unit.dimension };
+}
+
+/** A temperature scale where a difference or a constant may be meant. */
+function reportScale(unitText: string, span: Span, report: ReportFault): void {
+  report({
+    code: 'bad_quantity',
+    severity: 'error',
+    span,
+    found: `\`${unitText.trim()}\`, a temperature scale with its own zero`,
+    expected: 'kelvin there',
+    mend: 'convert to `K`',
+  });
 }
 
 /** The fault of a bare number where a dimension is due; the caller sets the span. */

@@ -97,7 +97,7 @@ export class Graph {
     if (x === 0) return this.number(0);
     if (y === 1) return a;
     // A division costs more than a product, and 1/y is exact to rounding.
-    if (y !== undefined && y !== 0) return this.multiply(a, this.number(1 / y));
+    if (y !== undefined && y !== 0 && Number.isFinite(1 / y)) return this.multiply(a, this.number(1 / y));
     return this.operation('divide', a, b);
   }
 

@@ -3,7 +3,7 @@
  * no part of a case file is ever copied into it. The check below holds that to its word: every statement must have one of the emitter's forms.
  */
 
-const numeral = String.raw`\(?-?(?:\d+\.?\d*(?:e[+-]?\d+)?)\)?`;
+const numeral = String.raw`\(?-?(?:\d+\.?\d*(?:e[+-]?\d+)?|Infinity|NaN)\)?`;
 const operand = String.raw`(?:t\d+|[TP]|${numeral})`;
 const value = String.raw`(?:${operand}|-${operand}|${operand} [-+*/] ${operand}|Math\.(?:pow|exp|log|log10|abs|sign|min|max)\(${operand}(?:, ${operand})?\)|${operand} > 0 \? Math\.(?:pow|sqrt)\(${operand}(?:, ${operand})?\) : 0|${operand} <= ${operand} \? 1 : 0|d?k\(${operand}, ${operand}\)|c\[o \+ \d+\])`;
 const statement = new RegExp(
