@@ -60,7 +60,12 @@ export const quantityKinds: Readonly<Record<QuantityKindName, QuantityKind>> = {
     'atm',
     'psi',
   ]),
-  pressureDifference: kind('pressure_difference', [1, -1, -2, 0, 0], 'a pressure difference', '0.5 bar', ['bar', 'Pa', 'kPa', 'psi']),
+  pressureDifference: kind('pressure_difference', [1, -1, -2, 0, 0], 'a pressure difference', '0.5 bar', [
+    'bar',
+    'Pa',
+    'kPa',
+    'psi',
+  ]),
   molarFlow: kind('molar_flow', [0, 0, -1, 1, 0], 'a molar flow', '12 mol/s', ['mol/s', 'kmol/h', 'Nm3/h']),
   massFlow: kind('mass_flow', [1, 0, -1, 0, 0], 'a mass flow', '0.4 kg/s', ['kg/s', 'kg/h', 't/h']),
   massFlux: kind('mass_flux', [1, -2, -1, 0, 0], 'a mass flux', '1.3 kg/(m^2 s)', [
