@@ -16,6 +16,7 @@ export interface FluidPropertyFunction {
   readonly pressureDerivative: (temperature: number, pressure: number) => number;
 }
 
+/** Compiles a fluid property; its unit is that of the data, SI. */
 export function createPropertyFunction(property: FluidProperty): FluidPropertyFunction {
   if (property.kind === 'constant') {
     const { value } = property;

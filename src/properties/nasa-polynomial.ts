@@ -17,6 +17,7 @@ const enthalpyConstantAt = coefficientCount;
 const entropyConstantAt = coefficientCount + 1;
 const stride = coefficientCount + 2;
 
+/** Piecewise polynomial in one layout for all forms; numbers belong to R = 1. */
 export interface NasaPolynomial {
   /** K, ascending; one more than ranges. */
   readonly limits: Float64Array;
@@ -25,6 +26,8 @@ export interface NasaPolynomial {
 }
 
 /**
+ * Brings a record's ranges into the common layout.
+ *
  * @param exponents - whole powers of T from -2 to 4, as long as each range's coefficients
  * @param ranges - ascending, each beginning where the one before ends
  * @throws RangeError for another power, or for ranges out of order; the case is checked before

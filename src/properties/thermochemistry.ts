@@ -44,6 +44,11 @@ export interface SpeciesThermochemistry {
 /** Enough for a smooth heat capacity over any span of temperature met here: exact for polynomials of degree 31. */
 const quadraturePointCount = 16;
 
+/**
+ * Thermochemistry of one species from its record.
+ *
+ * @throws RangeError where a polynomial's ranges leave a gap or its powers are not whole numbers from -2 to 4; the case checks both before
+ */
 export function createSpeciesThermochemistry(record: SpeciesRecord): SpeciesThermochemistry {
   const { heatCapacity, enthalpyOfFormation, standardEntropy } = record;
   if (!heatCapacity) {

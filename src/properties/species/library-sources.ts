@@ -86,4 +86,5 @@ export const librarySources = {
   nonPolar: 'non-polar components',
 } as const;
 
+/** Names one of {@link librarySources}. */
 export type LibrarySourceKey = keyof typeof librarySources;
