@@ -38,11 +38,13 @@ const deepest = 10;
  */
 export function parseUnit(text: string, report: ReportFault, offset = 0): ParsedUnit | undefined {
   const fault = (start: number, end: number, found: string, expected: string, mend?: string): undefined => {
+    // Where nothing stands, the last character is shown.
+    const shown = Math.max(0, Math.min(start, text.length - 1));
     const isUnknown = expected.startsWith('a unit');
     report({
       code: isUnknown ? 'unknown_unit' : 'bad_quantity',
       severity: 'error',
-      span: { start: offset + start, end: offset + Math.max(end, start + 1) },
+      span: { start: offset + shown, end: offset + Math.max(end, shown + 1) },
       found,
       expected,
       ...(mend !== undefined && { mend }),

@@ -259,7 +259,7 @@ describe('a rate law that reaches for more than arithmetic', () => {
 
   it('never stops the reader: random texts of a nasty alphabet give a formula or one fault', () => {
     const pieces = [
-      ...'pcyfkTPRABKe.()[]{}+-*/^,;:=!?%#\'"`\\$@~|&<>_ \t\n\r\0',
+      ...Array.from('pcyfkTPRABKe.()[]{}+-*/^,;:=!?%#\'"`\\$@~|&<>_ \t\n\r\0'),
       ...[
         '0x',
         '1e',
