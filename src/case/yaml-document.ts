@@ -1,0 +1,281 @@
+/**
+ * Case text to a plain tree with positions. Only what a case needs of YAML 1.2 is let in: maps, lists and plain values. Anchors, aliases, tags,
+ * merge keys and several documents are refused, so that a file is what it looks like and cannot grow when it is read.
+ */
+import {
+  isAlias,
+  isMap,
+  isPair,
+  isScalar,
+  isSeq,
+  LineCounter,
+  parseAllDocuments,
+  visit,
+  type Document,
+  type ParsedNode,
+  type YAMLError,
+} from 'yaml';
+import type { ReportProblem, Span } from '../diagnostics/problem.js';
+
+/** Part of a case file: a plain value with where it stands. */
+export type CaseNode =
+  | {
+      readonly kind: 'map';
+      readonly span: Span;
+      readonly entries: ReadonlyMap<string, { readonly keySpan: Span; readonly value: CaseNode }>;
+    }
+  | { readonly kind: 'list'; readonly span: Span; readonly items: readonly CaseNode[] }
+  | {
+      readonly kind: 'scalar';
+      readonly span: Span;
+      readonly value: string | number | boolean | null;
+      /** Offset of the first character of `value` in the file, where the text stands there letter for letter. */
+      readonly textStart: number | undefined;
+    };
+
+const deepestNesting = 30;
+const mostNodes = 20_000;
+
+/** @returns the root of the file; undefined where it cannot be read, with at least one problem reported */
+export function readYamlDocument(text: string, report: ReportProblem): CaseNode | undefined {
+  let faulty = false;
+  const refuse = (
+    code: Parameters<ReportProblem>[0]['code'],
+    span: Span,
+    found: string,
+    expected: string,
+    mend?: string,
+  ): void => {
+    faulty = true;
+    report({ code, severity: 'error', path: '', span, found, expected, ...(mend !== undefined && { mend }) });
+  };
+  if (deepestBrackets(text) > deepestNesting) {
+    refuse(
+      'yaml_forbidden',
+      { start: 0, end: 1 },
+      `brackets nested deeper than ${deepestNesting}`,
+      'a plain case file',
+    );
+    return undefined;
+  }
+  const documents = parseAllDocuments(text, {
+    lineCounter: new LineCounter(),
+    prettyErrors: false,
+    uniqueKeys: false,
+    version: '1.2',
+    merge: false,
+    strict: true,
+  });
+  if (!Array.isArray(documents) || documents.length === 0) {
+    refuse(
+      'empty_case',
+      { start: 0, end: 0 },
+      'an empty file',
+      'a case: see `bedwright --help` and the cases folder',
+    );
+    return undefined;
+  }
+  if (documents.length > 1) {
+    const second = documents[1]!;
+    const start = second.range[0];
+    refuse(
+      'yaml_forbidden',
+      { start, end: start + 3 },
+      'a second document',
+      'one case to a file',
+      'move it to a file of its own',
+    );
+    return undefined;
+  }
+  const document = documents[0]! as Document.Parsed;
+  for (const error of document.errors) reportSyntax(text, error, refuse);
+  for (const warning of document.warnings) reportSyntax(text, warning, refuse);
+  if (faulty) return undefined;
+  if (document.contents === null) {
+    refuse(
+      'empty_case',
+      { start: 0, end: Math.min(text.length, 1) },
+      'a file without content',
+      'a case: see the cases folder',
+    );
+    return undefined;
+  }
+  refuseForbidden(document, refuse);
+  if (faulty) return undefined;
+  return convert(document.contents, text, refuse);
+}
+
+type Refuse = (
+  code: Parameters<ReportProblem>[0]['code'],
+  span: Span,
+  found: string,
+  expected: string,
+  mend?: string,
+) => void;
+
+function refuseForbidden(document: Document.Parsed, refuse: Refuse): void {
+  let nodes = 0;
+  visit(document, (_key, node, path) => {
+    if (isPair(node)) return undefined;
+    const range = (node as ParsedNode | null)?.range;
+    if (!range) return undefined;
+    const span = { start: range[0], end: Math.max(range[1], range[0] + 1) };
+    if (++nodes > mostNodes || path.length > 2 * deepestNesting) {
+      refuse(
+        'yaml_forbidden',
+        span,
+        `more than ${mostNodes} entries or ${deepestNesting} levels`,
+        'a plain case file',
+      );
+      return visit.BREAK;
+    }
+    if (isAlias(node)) {
+      refuse(
+        'yaml_forbidden',
+        span,
+        `the alias \`*${node.source}\``,
+        'every value written out',
+        'copy the value here',
+      );
+      return undefined;
+    }
+    const { anchor, tag } = node as { anchor?: string; tag?: string };
+    if (anchor !== undefined) {
+      refuse('yaml_forbidden', span, `the anchor \`&${anchor}\``, 'values without anchors', 'remove it');
+    }
+    if (tag !== undefined)
+      refuse('yaml_forbidden', span, `the tag \`${tag}\``, 'values without tags', 'remove it');
+    return undefined;
+  });
+}
+
+function convert(node: ParsedNode | null, text: string, refuse: Refuse): CaseNode | undefined {
+  if (node === null) return undefined;
+  const span = { start: node.range[0], end: Math.max(node.range[1], node.range[0] + 1) };
+  if (isScalar(node)) return convertScalar(node.value, node, span, text, refuse);
+  if (isSeq(node)) {
+    return {
+      kind: 'list',
+      span,
+      items: node.items.flatMap((item) => {
+        const converted = convert(item as ParsedNode | null, text, refuse);
+        return converted ? [converted] : [];
+      }),
+    };
+  }
+  if (!isMap(node)) return undefined;
+  const entries = new Map<string, { keySpan: Span; value: CaseNode }>();
+  for (const pair of node.items) {
+    const key = pair.key as ParsedNode;
+    const keySpan = { start: key.range[0], end: Math.max(key.range[1], key.range[0] + 1) };
+    const name = isScalar(key) ? key.value : undefined;
+    if (typeof name !== 'string' && typeof name !== 'number' && typeof name !== 'boolean') {
+      refuse('wrong_type', keySpan, 'a key that is no word', 'a word');
+      continue;
+    }
+    if (name === '<<') {
+      refuse('yaml_forbidden', keySpan, 'a merge key `<<`', 'every key written out', 'copy the keys here');
+      continue;
+    }
+    // `no` and `NO` are words in YAML 1.2, but `true` is not: as a key it can only be meant as a word.
+    const word = String(name);
+    if (entries.has(word)) {
+      refuse('duplicate_key', keySpan, `\`${word}\` a second time`, 'each key once', 'remove one of them');
+      continue;
+    }
+    const value = convert(pair.value as ParsedNode | null, text, refuse) ?? {
+      kind: 'scalar',
+      span: keySpan,
+      value: null,
+      textStart: undefined,
+    };
+    entries.set(word, { keySpan, value });
+  }
+  return { kind: 'map', span, entries };
+}
+
+function convertScalar(
+  value: unknown,
+  node: {
+    readonly range?: readonly [number, number, number] | null;
+    readonly source?: string;
+    readonly type?: string;
+  },
+  span: Span,
+  text: string,
+  refuse: Refuse,
+): CaseNode | undefined {
+  if (typeof value === 'number' && !Number.isFinite(value)) {
+    refuse('out_of_range', span, `\`${node.source ?? String(value)}\``, 'a finite number');
+    return undefined;
+  }
+  if (
+    typeof value === 'string' ||
+    typeof value === 'number' ||
+    typeof value === 'boolean' ||
+    value === null
+  ) {
+    const quote = node.type === 'QUOTE_DOUBLE' || node.type === 'QUOTE_SINGLE' ? 1 : 0;
+    const start = span.start + quote;
+    const shown = typeof value === 'string' ? value : (node.source ?? '');
+    const isLiteral = text.startsWith(shown, start);
+    return { kind: 'scalar', span, value, textStart: isLiteral ? start : undefined };
+  }
+  refuse('wrong_type', span, 'a value of a kind that cases do not have', 'a text or a number');
+  return undefined;
+}
+
+/** Nesting of flow brackets, bounded before the parser recurses into them. */
+function deepestBrackets(text: string): number {
+  let depth = 0;
+  let deepest = 0;
+  for (let i = 0; i < text.length; i++) {
+    const code = text.charCodeAt(i);
+    if (code === 0x5b || code === 0x7b) deepest = Math.max(deepest, ++depth);
+    else if (code === 0x5d || code === 0x7d) depth = Math.max(0, depth - 1);
+  }
+  return deepest;
+}
+
+/** The parser's own words are for programmers; ours say what to do. */
+const syntaxTexts: Readonly<Record<string, readonly [found: string, expected: string, mend?: string]>> = {
+  TAB_AS_INDENT: ['a tab as indentation', 'spaces', 'replace the tab by two spaces'],
+  BAD_INDENT: ['an indentation that fits no level above', 'entries of one map in one column'],
+  BAD_ALIAS: [
+    'an alias without its anchor',
+    'every value written out',
+    'write the value; aliases are not used here',
+  ],
+  MISSING_CHAR: [
+    'a missing character: a bracket, quote or colon',
+    'brackets and quotes in pairs, `key: value`',
+  ],
+  MULTILINE_IMPLICIT_KEY: ['a key that runs over several lines', '`key: value` on one line'],
+  BLOCK_AS_IMPLICIT_KEY: [
+    'a second `: ` in one line',
+    'one key to a line',
+    'put texts that hold a colon in quotes',
+  ],
+  UNEXPECTED_TOKEN: [
+    'a character that does not belong here',
+    '`key: value`',
+    'put texts with special characters in quotes',
+  ],
+  TAG_RESOLVE_FAILED: ['a tag', 'values without tags', 'remove it'],
+  IMPOSSIBLE: ['text that cannot be read', '`key: value` lines'],
+  RESOURCE_EXHAUSTION: ['collections nested too deep', 'a plain case file'],
+};
+
+function reportSyntax(text: string, error: YAMLError, refuse: Refuse): void {
+  const [start, end] = error.pos;
+  const known = syntaxTexts[error.code];
+  const at = Math.min(start, Math.max(0, text.length - 1));
+  const span = { start: at, end: Math.max(Math.min(end, text.length), at + 1) };
+  refuse(
+    'yaml_syntax',
+    span,
+    known?.[0] ?? 'text that YAML cannot read',
+    known?.[1] ?? '`key: value` lines',
+    known?.[2],
+  );
+}
