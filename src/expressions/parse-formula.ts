@@ -132,7 +132,8 @@ class FormulaFault extends Error {
   constructor(code: ProblemCode, span: Span, found: string, expected: string, mend?: string) {
     super(found);
     this.code = code;
-    this.span = span;
+    // Often a token: only its place goes out.
+    this.span = { start: span.start, end: span.end };
     this.found = found;
     this.expected = expected;
     this.mend = mend;
@@ -167,7 +168,7 @@ class Walk {
         return this.constant();
       case 'ParenthesisNode': {
         const inner = this.visit((node as unknown as { content: MathNode }).content);
-        return { ...inner, isLiteral: false };
+        return { ...inner, span: this.widen(inner.span, '(', ')'), isLiteral: false };
       }
       case 'SymbolNode':
         return this.name((node as unknown as { name: string }).name);
@@ -350,7 +351,7 @@ class Walk {
       );
     }
     const operands = node.args.map((argument) => this.visit(argument));
-    const span = { start: token.start, end: operands.at(-1)?.span.end ?? token.end };
+    const span = this.widen({ start: token.start, end: operands.at(-1)?.span.end ?? token.end }, '', ')');
     if (isUnary ? operands.length !== 1 : operands.length < 2) {
       throw new FormulaFault(
         'bad_formula',
@@ -361,15 +362,15 @@ class Walk {
     }
     const first = operands[0]!;
     if (!isUnary) {
-      return operands.slice(1).reduce((left, right): Typed => {
+      const folded = operands.slice(1).reduce((left, right): Typed => {
         this.requireSame(left, right, `compared by \`${name}\``);
         return {
           ...left,
           expression: binary(name as 'min' | 'max', left.expression, right.expression),
-          span,
-          isLiteral: false,
+          span: { start: left.span.start, end: right.span.end },
         };
       }, first);
+      return { ...folded, span, isLiteral: false };
     }
     const result = (dimension: Dimension): Typed => ({
       expression: unary(name as UnaryFunction, first.expression),
@@ -394,11 +395,15 @@ class Walk {
   private operator(node: OperatorLike): Typed {
     if (node.fn === 'unaryMinus' || node.fn === 'unaryPlus') {
       const operand = this.visit(node.args[0]!);
-      return node.fn === 'unaryPlus' ? operand : { ...operand, expression: negate(operand.expression) };
+      const span = this.widen(operand.span, node.op);
+      return node.fn === 'unaryPlus'
+        ? { ...operand, span }
+        : { ...operand, span, expression: negate(operand.expression) };
     }
     const name = operatorNames.get(node.fn);
     if (!name || node.args.length !== 2) throw this.unsupported(`the operator \`${node.op}\``, '+ - * / ^');
     const left = this.visit(node.args[0]!);
+    if (name === 'divide') this.requireOneReading(node.args[1]!);
     // Behind a bare number a unit needs no sign between; behind a number with a unit more may follow: `80 kJ/mol`.
     const takesUnit = node.implicit === true || !isDimensionless(left.dimension);
     if ((name === 'multiply' || name === 'divide') && left.isLiteral && takesUnit) {
@@ -416,7 +421,6 @@ class Walk {
         };
       }
     }
-    if (name === 'divide') this.requireOneReading(node.args[1]!);
     const right = this.visit(node.args[1]!);
     const span = { start: left.span.start, end: right.span.end };
     const result = (dimension: Dimension): Typed => ({
@@ -574,6 +578,16 @@ class Walk {
     return `\`${shown}\` (${isDimensionless(typed.dimension) ? 'a pure number' : formatDimension(typed.dimension)})`;
   }
 
+  /** A span with the marks just before and behind it, where they are the ones named. */
+  private widen(span: Span, before: string, after = ''): Span {
+    const previous = this.tokens.findLast(({ end }) => end <= span.start);
+    const following = this.tokens.find(({ start }) => start >= span.end);
+    return {
+      start: previous?.text === before ? previous.start : span.start,
+      end: following?.text === after ? following.end : span.end,
+    };
+  }
+
   /** The next number or name, if it is the one asked for: a tree that leaves any out was not read as the text stands. */
   private take(kind: FormulaToken['kind'], text?: string): FormulaToken | undefined {
     const at = this.nextLeaf();
@@ -670,7 +684,9 @@ function reportSyntax(
   report({
     code: 'bad_formula',
     severity: 'error',
-    span: token ?? { start: Math.max(0, text.length - 1), end: text.length },
+    span: token
+      ? { start: token.start, end: token.end }
+      : { start: Math.max(0, text.length - 1), end: text.length },
     found: token ? `\`${token.text}\` where the formula cannot go on so` : 'an end where more is due',
     expected: 'an expression of numbers, names, + - * / ^ and parentheses in pairs',
   });
