@@ -1,8 +1,8 @@
 import { distance } from 'fastest-levenshtein';
 
-/** The known name that a mistyped one most likely means; undefined where none is near enough (one slip in three letters, case aside). */
+/** The known name that a mistyped one most likely means; undefined where none is near enough (one slip in three letters, case aside; none in one). */
 export function nearestName(name: string, known: Iterable<string>): string | undefined {
-  const allowed = Math.max(1, Math.floor(name.length / 3));
+  const allowed = name.length < 2 ? 0 : Math.max(1, Math.floor(name.length / 3));
   let best: string | undefined;
   let least = allowed + 1;
   for (const candidate of known) {

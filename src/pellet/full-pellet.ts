@@ -21,7 +21,10 @@ const firstRung = 2;
 const generousFraction = 1e-4;
 /** Rungs above the one in use for showing the inside. */
 const interiorRungs = 2;
-/** Rates below this fraction of the largest need not be resolved to the relative tolerance. */
+/**
+ * Rates below this fraction of the largest met so far need not be resolved to the relative tolerance: they add that much less to any extent,
+ * and near equilibrium, where a net rate vanishes between two large ones, its relative error says nothing.
+ */
 const smallRateFraction = 1e-3;
 
 /**
@@ -35,6 +38,7 @@ export class FullPellet implements PelletModel {
   private readonly ladder: ResolutionLadder;
   private readonly made = new Map<number, CollocatedPellet>();
   private rung = firstRung;
+  private largestRate = 0;
   private current: CollocatedPellet;
   private lastBulk: PelletBulk | undefined;
 
@@ -103,13 +107,14 @@ export class FullPellet implements PelletModel {
   reviewResolution(bulk: PelletBulk): 'adequate' | 'raised' {
     const startRung = this.rung;
     if (this.solve(bulk) !== 'converged') return this.rung > startRung ? 'raised' : 'adequate';
+    for (const rate of this.averageRates) this.largestRate = Math.max(this.largestRate, Math.abs(rate));
     while (this.rung < finestRung) {
       const coarse = this.current;
       const fine = this.onRung(this.rung + 1);
       fine.adopt(coarse);
       const error =
         fine.solve(bulk) === 'converged'
-          ? largestDifference(coarse.averageRates, fine.averageRates)
+          ? largestDifference(coarse.averageRates, fine.averageRates, this.largestRate)
           : Infinity;
       if (error > this.input.tolerance) {
         this.use(this.rung + 1);
@@ -119,7 +124,7 @@ export class FullPellet implements PelletModel {
       if (this.rung === startRung && this.rung > 0 && error < generousFraction * this.input.tolerance) {
         const coarser = this.onRung(this.rung - 1);
         coarser.adopt(coarse);
-        this.use(this.rung - 1);
+        if (coarser.solve(bulk) === 'converged') this.use(this.rung - 1);
       }
       break;
     }
@@ -146,9 +151,8 @@ export class FullPellet implements PelletModel {
   }
 }
 
-/** Largest relative difference; small rates are measured by the largest one. */
-function largestDifference(coarse: Float64Array, fine: Float64Array): number {
-  const largest = fine.reduce((most, rate) => Math.max(most, Math.abs(rate)), 0);
+/** Largest difference, each rate measured by itself or, where it is small, by the largest rate met so far. */
+function largestDifference(coarse: Float64Array, fine: Float64Array, largest: number): number {
   if (largest === 0) return 0;
   return fine.reduce((worst, rate, j) => {
     const scale = Math.max(Math.abs(rate), smallRateFraction * largest);

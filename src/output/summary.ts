@@ -1,0 +1,107 @@
+import type { ReactorSpecification } from '../bed/reactor-specification.js';
+import type { RunResult } from '../bed/run-result.js';
+import { caution } from './caution.js';
+
+/** Where a result comes from. */
+export interface Provenance {
+  readonly tool: 'bedwright';
+  readonly version: string;
+  /** File name of the case, without folders. */
+  readonly caseFile: string;
+  /** SHA-256 of the case file's bytes, hexadecimal. */
+  readonly caseHash: string;
+}
+
+/** What JSON can hold. */
+export type Json = string | number | boolean | null | readonly Json[] | { readonly [key: string]: Json };
+
+const finite = (value: number | null | undefined): number | null =>
+  value !== null && value !== undefined && Number.isFinite(value) ? value : null;
+
+const byKey = <Entry>(
+  entries: readonly Entry[],
+  key: (entry: Entry, index: number) => string,
+  value: (entry: Entry, index: number) => Json,
+): Record<string, Json> =>
+  Object.fromEntries(entries.map((entry, index) => [key(entry, index), value(entry, index)]));
+
+/**
+ * `summary.json`: units stand in the key names; numbers are never NaN or infinite, what is unknown is null.
+ *
+ * @param seconds - time of computing, null to leave it out
+ */
+export function summarise(
+  result: RunResult,
+  specification: ReactorSpecification,
+  provenance: Provenance,
+  seconds: number | null,
+): Record<string, Json> {
+  const { speciesIds, reactionNames, outlet } = result;
+  const ofSpecies = (values: readonly number[]): Record<string, Json> =>
+    byKey(values, (_value, i) => speciesIds[i]!, finite);
+  return {
+    title: specification.title,
+    status: result.status,
+    stop: result.stop
+      ? { reason: result.stop.reason, position_m: result.stop.position, message: result.stop.message }
+      : null,
+    outlet: {
+      position_m: outlet.position,
+      temperature_K: finite(outlet.temperature),
+      pressure_Pa: finite(outlet.pressure),
+      molar_flow_mol_s: ofSpecies(outlet.molarFlows),
+      mole_fraction: ofSpecies(outlet.moleFractions),
+    },
+    conversion: byKey(
+      result.conversions,
+      ({ speciesIndex }) => speciesIds[speciesIndex]!,
+      ({ value }) => finite(value),
+    ),
+    selectivity: byKey(
+      result.selectivities,
+      ({ productIndex, reactantIndex }) => `${speciesIds[productIndex]!}_from_${speciesIds[reactantIndex]!}`,
+      ({ selectivity }) => finite(selectivity),
+    ),
+    yield: byKey(
+      result.selectivities,
+      ({ productIndex, reactantIndex }) => `${speciesIds[productIndex]!}_from_${speciesIds[reactantIndex]!}`,
+      (entry) => finite(entry.yield),
+    ),
+    peak: { temperature_K: finite(result.peak.temperature), position_m: finite(result.peak.position) },
+    pressure_drop_Pa: finite(result.pressureDrop),
+    heat_removed_W: finite(result.heatRemoved),
+    catalyst_mass_kg: finite(result.catalystMass),
+    effectiveness: byKey(
+      result.effectiveness,
+      (_entry, j) => reactionNames[j]!,
+      ({ inlet, outlet: out, mean }) => ({ inlet: finite(inlet), outlet: finite(out), mean: finite(mean) }),
+    ),
+    balances: {
+      mass: finite(result.balances.mass),
+      elements: Object.fromEntries(
+        Object.entries(result.balances.elements).map(([element, value]) => [element, finite(value)]),
+      ),
+      energy: finite(result.balances.energy),
+    },
+    criteria: result.groups.map(({ name, of, value, unit, definition, source }) => ({
+      name,
+      of: of ?? null,
+      place: 'inlet',
+      value: finite(value),
+      unit,
+      definition,
+      source,
+    })),
+    events: result.events.map(({ kind, position, message }) => ({ kind, position_m: position, message })),
+    warnings: [...result.warnings],
+    assumptions: result.assumptions.map(({ about, statement, source }) => ({ about, statement, source })),
+    work: { ...result.work, seconds: finite(seconds) },
+    provenance: {
+      tool: provenance.tool,
+      version: provenance.version,
+      case_file: provenance.caseFile,
+      case_sha256: provenance.caseHash,
+    },
+    caution,
+  };
+}
