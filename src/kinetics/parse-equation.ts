@@ -18,7 +18,7 @@ export function parseEquation(
   speciesIds: readonly string[],
   report: ReportFault,
 ): ParsedEquation | undefined {
-  let isSound = true;
+  let faultCount = 0;
   const fault = (
     code: ProblemCode,
     start: number,
@@ -27,7 +27,7 @@ export function parseEquation(
     expected: string,
     mend?: string,
   ): void => {
-    isSound = false;
+    faultCount++;
     // Where nothing stands, the character before the end of the text is shown.
     const shown = Math.max(0, Math.min(start, text.length - 1));
     const span = { start: shown, end: Math.max(end, shown + 1) };
@@ -102,7 +102,7 @@ export function parseEquation(
   };
   readSide(0, arrow.index, -1);
   readSide(arrow.index + arrow[0].length, text.length, 1);
-  if (isSound && stoichiometry.every((coefficient) => coefficient === 0)) {
+  if (faultCount === 0 && stoichiometry.every((coefficient) => coefficient === 0)) {
     fault(
       'wrong_value',
       0,
@@ -111,5 +111,5 @@ export function parseEquation(
       'a reaction that changes something',
     );
   }
-  return isSound ? { stoichiometry, isReversible: arrow[0] === '<=>' } : undefined;
+  return faultCount === 0 ? { stoichiometry, isReversible: arrow[0] === '<=>' } : undefined;
 }

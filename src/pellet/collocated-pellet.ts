@@ -18,6 +18,13 @@ import type { PelletBulk, PelletModelInput, PelletStatus, PelletWork } from './p
 import { PelletNodes } from './pellet-nodes.js';
 
 const maximumIterations = 25;
+/**
+ * Part of the pellet's tolerance left to the iteration. Averages magnify errors of the concentrations, by about the inverse of the
+ * effectiveness and more near equilibrium.
+ */
+const iterationShare = 1e-3;
+/** A change this far below the tolerance ends the iteration whatever its contraction. */
+const negligibleShare = 0.1;
 /** Chord iterations that contract worse than this get new factors. */
 const slowContraction = 0.2;
 /** The change may grow this many times in a row before the attempt is given up. */
@@ -236,7 +243,7 @@ export class CollocatedPellet {
 
   /** Newton from the present unknowns, for a pellet of `growth` times the true size. */
   private iterate(bulk: PelletBulk, growth: number): 'converged' | 'no_state' {
-    const { tolerance } = this.input;
+    const tolerance = this.input.tolerance * iterationShare;
     let previous = Infinity;
     let worsenings = 0;
     let needsFactors = !this.hasFactors;
@@ -252,7 +259,7 @@ export class CollocatedPellet {
       // The first iteration cannot tell how well it contracts.
       const contraction = iteration === 0 ? 1 : change / previous;
       const remaining = contraction < 1 ? (change * contraction) / (1 - contraction) : Infinity;
-      if (change <= tolerance * 1e-3 || remaining <= tolerance) {
+      if (change <= tolerance * negligibleShare || remaining <= tolerance) {
         // The averages are taken at the final unknowns.
         return this.evaluateNodes(bulk, growth, false) ? 'converged' : 'no_state';
       }

@@ -25,7 +25,7 @@ const interiorRungs = 2;
  * Rates below this fraction of the largest met so far need not be resolved to the relative tolerance: they add that much less to any extent,
  * and near equilibrium, where a net rate vanishes between two large ones, its relative error says nothing.
  */
-const smallRateFraction = 1e-3;
+const smallRateFraction = 0.03;
 
 /**
  * The full reaction–diffusion problem, solved on the coarsest grid of the ladder that meets the tolerance: the averages are compared with
