@@ -1,6 +1,6 @@
 /**
  * All rate laws of a case to two generated functions: rates, and rates with their exact derivatives. One graph for all laws, so that what they
- * share is computed once; straight-line code, since an interpreted law costs 50 to 100 times more.
+ * share is computed once; straight-line code, since interpreted laws and derivatives cost some 80 times more (test/bench/rates.bench.ts).
  */
 import { differentiate } from '../expressions/compile/differentiate.js';
 import { emitStatements, type Assignment } from '../expressions/compile/emit.js';
