@@ -78,7 +78,7 @@ export function parseChemicalFormula(text: string, report: ReportFault): Record<
   };
   if (text.length > longest) return refuse(0, text.length, `a formula of ${text.length} characters`);
   if (text === '') return refuse(0, 1, 'an empty formula');
-  const groups: Map<string, number>[] = [new Map()];
+  const groups = [new Map<string, number>()];
   /** What the next count multiplies. */
   let last: ReadonlyMap<string, number> | undefined;
   tokenPattern.lastIndex = 0;
