@@ -10,6 +10,11 @@ import type { StopReason } from './run-result.js';
  * of a millionth) are then still good to a percent of the tolerance asked.
  */
 const absoluteShare = 0.1;
+/**
+ * The integrator's local tolerance over the tolerance asked of the results. Measured on a first-order bed and a cooled tube with a hot spot: with
+ * a factor of 5 exit flows, peak and profile are within half of the tolerance asked to twice that (peak position).
+ */
+const localToleranceFactor = 5;
 const maximumSteps = 20_000;
 
 /** Walks down the bed. The pellet's resolution is reviewed at the inlet and at the end of every step. */
@@ -19,7 +24,7 @@ export function integrateBed(
   events: readonly BedEvent[],
   outputPositions: Float64Array,
 ): IntegrationResult {
-  const { tolerance } = model.specification.numerics;
+  const tolerance = localToleranceFactor * model.specification.numerics.tolerance;
   const { length } = model.specification.bed;
   if (balances.unpack(balances.initialState)) model.pellet.reviewResolution(balances.conditions);
   return integrate(balances.problem, [0, length], balances.initialState, {
