@@ -12,7 +12,7 @@ export const importTable: readonly FolderRule[] = [
   {
     folder: 'diagnostics',
     holds: 'faults and problems as records, and the text made from them',
-    packages: [],
+    packages: ['fastest-levenshtein'],
   },
   {
     folder: 'numerics',

@@ -149,7 +149,7 @@ function reactionGroups(model: ReactorModel, balances: Balances, j: number): Dim
     push({
       name: 'adiabatic temperature rise',
       value:
-        (-heat * feedFlows[key]!) / (-row[key]! * model.heatContent!.capacityFlow(feedFlows, temperature)),
+        (-heat * feedFlows[key]!) / (-row[key]! * model.heatContent.capacityFlow(feedFlows, temperature)),
       unit: 'K',
       definition: 'full conversion of the limiting reactant by this reaction alone, inlet heat capacity',
       source: 'definition',

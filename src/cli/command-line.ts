@@ -53,7 +53,7 @@ function define(finish: (status: ExitStatus) => void, streams: Streams): Argv {
       array: true,
       demandOption: true,
       describe: 'case files (YAML)',
-    }) as unknown as Argv<{ cases: string[] }>;
+    });
   return yargs()
     .scriptName('bedwright')
     .usage('$0 <command>\n\nPacked-bed catalytic reactors with reaction and diffusion solved in the pellet.')

@@ -25,15 +25,14 @@ export function placeOf(text: string, offset: number): LinePlace {
 
 /** Text from a stranger made harmless for a terminal: control characters and direction marks become visible codes. */
 export function visibleText(text: string): string {
-  // eslint-disable-next-line no-control-regex, no-misleading-character-class -- exactly these are made visible
-  return text.replace(
-    /[\u0000-\u001f\u007f-\u009f\u200b-\u200f\u2028-\u202e\u2060-\u2069\ufeff]/g,
-    (character) => {
-      if (character === '\t') return ' ';
-      return `<U+${character.charCodeAt(0).toString(16).toUpperCase().padStart(4, '0')}>`;
-    },
-  );
+  return text.replace(invisible, (character) => {
+    if (character === '\t') return ' ';
+    return `<U+${character.codePointAt(0)!.toString(16).toUpperCase().padStart(4, '0')}>`;
+  });
 }
+
+/** Control characters, zero-width characters, marks of direction, line and paragraph separators, byte-order mark. */
+const invisible = /[\p{Cc}\p{Cf}\p{Zl}\p{Zp}]/gu;
 
 /** In the order of the file; errors before warnings at one place. */
 export function sortProblems(problems: readonly Problem[]): readonly Problem[] {

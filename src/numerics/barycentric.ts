@@ -53,7 +53,7 @@ export function lagrangeValues(nodes: Float64Array, target: number): Float64Arra
   let sum = 0;
   nodes.forEach((node, i) => {
     values[i] = weights[i]! / (target - node);
-    sum += values[i]!;
+    sum += values[i];
   });
   return values.map((value) => value / sum);
 }
