@@ -21,6 +21,9 @@ export default tseslint.config(
   {
     files: ['**/*.js'],
     ...tseslint.configs.disableTypeChecked,
-    languageOptions: { globals: { URL: 'readonly', process: 'readonly', console: 'readonly' } },
+    languageOptions: {
+      ...tseslint.configs.disableTypeChecked.languageOptions,
+      globals: { URL: 'readonly', process: 'readonly', console: 'readonly' },
+    },
   },
 );
