@@ -47,6 +47,7 @@ export const importTable: readonly FolderRule[] = [
     folder: 'output',
     holds: 'result to text, tables, CSV, charts',
     packages: [
+      'canvas',
       'chart.js',
       'chartjs-node-canvas',
       'cli-table3',
