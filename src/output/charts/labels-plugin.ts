@@ -32,9 +32,29 @@ export function labelsPlugin(lines: readonly LineLabel[], points: readonly Point
   };
 }
 
-/** Chart.js types its context by the browser's; ours is the canvas package's. */
-function contextOf(chart: Chart): SKRSContext2D {
-  return chart.ctx;
+/** The part of a canvas context that labels need; Chart.js's own type is the browser's, which is not among our libraries. */
+interface DrawingContext {
+  font: string;
+  fillStyle: string;
+  strokeStyle: string;
+  lineWidth: number;
+  globalAlpha: number;
+  textAlign: 'left' | 'right';
+  textBaseline: 'middle' | 'bottom';
+  save: () => void;
+  restore: () => void;
+  beginPath: () => void;
+  moveTo: (x: number, y: number) => void;
+  lineTo: (x: number, y: number) => void;
+  arc: (x: number, y: number, radius: number, start: number, end: number) => void;
+  stroke: () => void;
+  fillRect: (x: number, y: number, width: number, height: number) => void;
+  fillText: (text: string, x: number, y: number) => void;
+  measureText: (text: string) => { readonly width: number };
+}
+
+function contextOf(chart: Chart): DrawingContext {
+  return chart.ctx as unknown as DrawingContext;
 }
 
 function drawLineLabels(chart: Chart, lines: readonly LineLabel[]): void {
