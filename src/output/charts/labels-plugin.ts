@@ -1,4 +1,4 @@
-import type { Chart, Plugin } from 'chart.js';
+import type { Plugin } from 'chart.js';
 import { fontFamily, ink, limitColour, paper } from './theme.js';
 
 /** Name of a line, written at its right end. */
@@ -26,8 +26,9 @@ export function labelsPlugin(lines: readonly LineLabel[], points: readonly Point
   return {
     id: 'directLabels',
     afterDatasetsDraw(chart) {
-      drawLineLabels(chart, lines);
-      points.forEach((point) => drawPointLabel(chart, point));
+      const drawn = chart as unknown as DrawnChart;
+      drawLineLabels(drawn, lines);
+      points.forEach((point) => drawPointLabel(drawn, point));
     },
   };
 }
@@ -53,13 +54,15 @@ interface DrawingContext {
   measureText: (text: string) => { readonly width: number };
 }
 
-function contextOf(chart: Chart): DrawingContext {
-  return chart.ctx as unknown as DrawingContext;
+/** A chart as labels see it. */
+interface DrawnChart {
+  readonly ctx: DrawingContext;
+  readonly chartArea: { readonly top: number; readonly bottom: number; readonly right: number };
+  readonly scales: Readonly<Record<string, { getPixelForValue: (value: number) => number }>>;
 }
 
-function drawLineLabels(chart: Chart, lines: readonly LineLabel[]): void {
-  const { chartArea, scales } = chart;
-  const ctx = contextOf(chart);
+function drawLineLabels(chart: DrawnChart, lines: readonly LineLabel[]): void {
+  const { ctx, chartArea, scales } = chart;
   const placed = lines
     .flatMap(({ text, colour, y }) =>
       y === null ? [] : [{ text, colour, at: scales['y']!.getPixelForValue(y) }],
@@ -100,9 +103,8 @@ export function spread(wanted: readonly number[], top: number, bottom: number): 
   return heights.map((height) => Math.max(height, top));
 }
 
-function drawPointLabel(chart: Chart, { x, y, label, kind }: PointLabel): void {
-  const { chartArea, scales } = chart;
-  const ctx = contextOf(chart);
+function drawPointLabel(chart: DrawnChart, { x, y, label, kind }: PointLabel): void {
+  const { ctx, chartArea, scales } = chart;
   const [left, up] = [scales['x']!.getPixelForValue(x), scales['y']!.getPixelForValue(y)];
   ctx.save();
   ctx.font = `12.5px "${fontFamily}"`;
