@@ -1,10 +1,9 @@
 /**
  * Unit text to a factor and a dimension: `mol/(kg s bar^2)`, `J/mol/K`, `kg m^-3`, `1/s`. Products by space, `*` or `·`, quotients by `/`,
- * exponents signed decimals behind `^` (or the superscripts ² and ³), parentheses. After a slash a product must stand in parentheses:
+ * exponents signed decimals behind `^` (or raised digits: `m²`, `s⁻¹`), parentheses. After a slash a product must stand in parentheses:
  * `J/mol K` is read by some as J K/mol and by others as J/(mol K), so it is refused.
  */
-import { didYouMean } from '../diagnostics/nearest-name.js';
-import type { ReportFault } from '../diagnostics/problem.js';
+import type { ProblemCode, ReportFault } from '../diagnostics/problem.js';
 import {
   dimensionless,
   divideDimensions,
@@ -12,9 +11,11 @@ import {
   raiseDimension,
   type Dimension,
 } from './dimension.js';
-import { findUnit, gaugeUnits, unitSymbols } from './units.js';
+import { findUnit, isGaugeUnit, isPressureUnit, nearestUnit } from './units.js';
 
+/** A unit expression, worked out. */
 export interface ParsedUnit {
+  /** One of it in SI. */
   readonly factor: number;
   readonly dimension: Dimension;
   /** Only for a temperature scale standing alone: kelvin = (value + offset) * factor. */
@@ -29,20 +30,28 @@ interface Token {
 }
 
 const tokenPattern =
-  /\s+|(?<number>[+-]?(?:\d+\.?\d*|\.\d+))|(?<symbol>[A-Za-zµμÅ°%ü]+(?:(?<=Nm)3)?(?![A-Za-zµμÅ°]))|(?<power>[²³])|(?<mark>[()*·/^])/uy;
+  /\s+|(?<number>[+-]?(?:\d+\.?\d*|\.\d+))|(?<symbol>[A-Za-zµμÅ°%ü]+(?:(?<=Nm)3)?(?![A-Za-zµμÅ°]))|(?<power>[⁺⁻]?[⁰¹²³⁴⁵⁶⁷⁸⁹]+)|(?<mark>[()*·/^])/uy;
+const raisedDigits = '⁰¹²³⁴⁵⁶⁷⁸⁹';
 const deepest = 10;
+const absolutePressures = 'pressures are absolute here';
 
 /**
  * @param text - the unit alone, without the number before it
  * @param report - receives at most one fault, offsets counted from the start of `text` plus `offset`
  */
 export function parseUnit(text: string, report: ReportFault, offset = 0): ParsedUnit | undefined {
-  const fault = (start: number, end: number, found: string, expected: string, mend?: string): undefined => {
+  const refuse = (
+    code: ProblemCode,
+    start: number,
+    end: number,
+    found: string,
+    expected: string,
+    mend?: string,
+  ): undefined => {
     // Where nothing stands, the last character is shown.
     const shown = Math.max(0, Math.min(start, text.length - 1));
-    const isUnknown = expected.startsWith('a unit');
     report({
-      code: isUnknown ? 'unknown_unit' : 'bad_quantity',
+      code,
       severity: 'error',
       span: { start: offset + shown, end: offset + Math.max(end, shown + 1) },
       found,
@@ -51,6 +60,9 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
     });
     return undefined;
   };
+  const fault = refuse.bind(undefined, 'bad_quantity');
+  /** Something else stands where a unit is due. */
+  const noUnit = refuse.bind(undefined, 'unknown_unit');
   const tokens: Token[] = [];
   tokenPattern.lastIndex = 0;
   while (tokenPattern.lastIndex < text.length) {
@@ -62,6 +74,7 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
         start + 1,
         `the character \`${text[start]!}\``,
         'unit symbols with * / ^ and parentheses',
+        text[start] === ',' ? 'write a dot for the decimals' : undefined,
       );
     const end = tokenPattern.lastIndex;
     const groups = match.groups!;
@@ -70,21 +83,21 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
     else if (groups['power'] !== undefined) {
       tokens.push(
         { kind: '^', text: '^', start, end },
-        { kind: 'number', text: match[0] === '²' ? '2' : '3', start, end },
+        { kind: 'number', text: lowered(match[0]), start, end },
       );
     } else if (groups['mark'] !== undefined) {
       const kind = match[0] === '·' ? '*' : (match[0] as Token['kind']);
       tokens.push({ kind, text: match[0], start, end });
     }
   }
-  if (tokens.length === 0) return fault(0, text.length, 'no unit', 'a unit');
+  if (tokens.length === 0) return noUnit(0, text.length, 'no unit', 'a unit');
 
   let at = 0;
   const peek = (): Token | undefined => tokens[at];
 
   const primary = (depth: number): ParsedUnit | undefined => {
     const token = peek();
-    if (!token) return fault(text.length, text.length, 'the end', 'a unit behind the operator');
+    if (!token) return noUnit(text.length, text.length, 'the end', 'a unit behind the operator');
     at++;
     if (token.kind === '(') {
       if (depth > deepest)
@@ -97,23 +110,36 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
       return inner;
     }
     if (token.kind === 'number') {
-      if (Number(token.text) !== 1)
-        return fault(token.start, token.end, `the number ${token.text}`, 'a unit symbol here');
+      if (Number(token.text) !== 1) {
+        const mend = at === 1 ? 'write the digits of a number without spaces' : undefined;
+        return noUnit(token.start, token.end, `the number ${token.text}`, 'a unit symbol here', mend);
+      }
       return { factor: 1, dimension: dimensionless };
     }
     if (token.kind !== 'symbol')
-      return fault(token.start, token.end, `\`${token.text}\``, 'a unit symbol here');
+      return noUnit(token.start, token.end, `\`${token.text}\``, 'a unit symbol here');
     return symbol(token);
   };
 
   const symbol = (token: Token): ParsedUnit | undefined => {
-    if (gaugeUnits.has(token.text)) {
+    const suffix = suffixBehind(token);
+    const isGauge = suffix === undefined ? isGaugeUnit(token.text) : /^g/.test(suffix.text);
+    if (isGauge) {
       return fault(
         token.start,
-        token.end,
-        `\`${token.text}\`, a gauge pressure`,
+        suffix?.end ?? token.end,
+        `\`${text.slice(token.start, suffix?.end ?? token.end)}\`, a gauge pressure`,
         'an absolute pressure',
         'add the atmospheric pressure of your site and write bar, kPa or psi',
+      );
+    }
+    if (suffix) {
+      return noUnit(
+        token.start,
+        suffix.end,
+        `\`${text.slice(token.start, suffix.end)}\``,
+        'a unit that is known here',
+        `write \`${token.text}\`: ${absolutePressures}`,
       );
     }
     const unit = findUnit(token.text);
@@ -124,13 +150,22 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
         ...(unit.offset !== undefined && { offset: unit.offset }),
       };
     }
-    return fault(
+    const nearest = nearestUnit(token.text);
+    return noUnit(
       token.start,
       token.end,
       `\`${token.text}\``,
       'a unit that is known here',
-      didYouMean(token.text, unitSymbols),
+      nearest === undefined ? undefined : `did you mean \`${nearest}\`?`,
     );
+  };
+
+  /** What `bar(g)` or `psi(a)` says in parentheses: not grams or years, but how the pressure counts. */
+  const suffixBehind = (token: Token): { text: string; end: number } | undefined => {
+    const [open, name, close] = tokens.slice(at, at + 3);
+    if (open?.kind !== '(' || close?.kind !== ')' || !/^(?:g|gauge|a|abs)$/.test(name!.text))
+      return undefined;
+    return isPressureUnit(token.text) ? { text: name!.text, end: close.end } : undefined;
   };
 
   const power = (depth: number): ParsedUnit | undefined => {
@@ -139,7 +174,7 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
     const next = peek();
     if (next?.kind === 'number' && tokens[at - 1]!.kind === 'symbol' && tokens[at - 1]!.end === next.start) {
       const name = tokens[at - 1]!.text;
-      return fault(
+      return noUnit(
         tokens[at - 1]!.start,
         next.end,
         `\`${name}${next.text}\``,
@@ -217,4 +252,12 @@ export function parseUnit(text: string, report: ReportFault, offset = 0): Parsed
     );
   }
   return result;
+}
+
+/** Raised digits as plain ones. */
+function lowered(raised: string): string {
+  return raised.replace(/./gu, (character) => {
+    if (character === '⁻') return '-';
+    return character === '⁺' ? '+' : String(raisedDigits.indexOf(character));
+  });
 }

@@ -3,9 +3,11 @@
  *
  * @source NIST SP 811 (2008), Appendix B; CODATA 2018 for the gas constant behind normal cubic metres
  */
+import { nearestName } from '../diagnostics/nearest-name.js';
 import { gasConstant, standardAtmosphere, zeroCelsius } from './constants.js';
-import { dimensionless, type Dimension } from './dimension.js';
+import { dimensionless, sameDimension, type Dimension } from './dimension.js';
 
+/** A unit symbol with what it is worth. */
 export interface Unit {
   readonly symbol: string;
   /** One unit in SI. */
@@ -51,7 +53,7 @@ const rows: readonly Row[] = [
   ['m', 1, length, 'prefix'],
   ['angstrom Å', 1e-10, length],
   ['ft', foot, length],
-  ['inch', inch, length],
+  ['inch in', inch, length],
   ['s', 1, time, 'prefix'],
   ['min', 60, time],
   ['h hr', 3600, time],
@@ -95,6 +97,7 @@ const prefixes: ReadonlyMap<string, number> = new Map([
   ['G', 1e9],
   ['M', 1e6],
   ['k', 1e3],
+  ['h', 1e2],
   ['d', 1e-1],
   ['c', 1e-2],
   ['m', 1e-3],
@@ -133,13 +136,72 @@ export function findUnit(symbol: string): Unit | undefined {
   return { symbol, factor: prefix * base.factor, dimension: base.dimension, takesPrefix: false };
 }
 
-/** Gauge pressures: recognised so that they can be refused with the right words. */
-export const gaugeUnits: ReadonlySet<string> = new Set([
-  'barg',
-  'psig',
-  'kPag',
-  'MPag',
-  'mbarg',
-  'atg',
-  'atü',
-]);
+/** Whether a symbol is a gauge pressure (`barg`, `psig`): recognised so that it can be refused with the right words. */
+export function isGaugeUnit(symbol: string): boolean {
+  return symbol === 'atü' || (symbol.endsWith('g') && isPressureUnit(symbol.slice(0, -1)));
+}
+
+/** Whether a symbol is a unit of pressure. */
+export function isPressureUnit(symbol: string): boolean {
+  const unit = findUnit(symbol);
+  return unit !== undefined && sameDimension(unit.dimension, pressure);
+}
+
+/** Spellings in common use that are no symbols here, with the symbol that is. */
+const otherSpellings: ReadonlyMap<string, string> = new Map(
+  Object.entries({
+    bara: 'bar',
+    psia: 'psi',
+    kpa: 'kPa',
+    pa: 'Pa',
+    ata: 'at',
+    kelvin: 'K',
+    c: 'degC',
+    celsius: 'degC',
+    f: 'degF',
+    fahrenheit: 'degF',
+    rankine: 'degR',
+    sec: 's',
+    second: 's',
+    seconds: 's',
+    minute: 'min',
+    minutes: 'min',
+    hour: 'h',
+    hours: 'h',
+    days: 'day',
+    years: 'year',
+    metre: 'm',
+    meter: 'm',
+    micron: 'um',
+    inches: 'inch',
+    feet: 'ft',
+    mole: 'mol',
+    moles: 'mol',
+    gmol: 'mol',
+    kgmol: 'kmol',
+    lbs: 'lb',
+    tonne: 't',
+    tonnes: 't',
+    litre: 'L',
+    liter: 'L',
+    joule: 'J',
+    watt: 'W',
+    pascal: 'Pa',
+    percent: '%',
+  }),
+);
+
+/** The symbol that an unknown spelling most likely means, for a message; undefined where none is near. */
+export function nearestUnit(symbol: string): string | undefined {
+  const lower = symbol.toLowerCase();
+  const spelled = otherSpellings.get(lower);
+  if (spelled !== undefined) return spelled;
+  // A slip of capitals only, prefixes included: `KJ`, `Kg`. Two such readings (`mw`: mW or MW) are left to the reader.
+  const sameLetters = [...units.values()].flatMap(({ symbol: base, takesPrefix }) =>
+    (takesPrefix ? ['', ...prefixes.keys()] : [''])
+      .map((prefix) => prefix + base)
+      .filter((candidate) => candidate.toLowerCase() === lower),
+  );
+  if (sameLetters.length > 0) return sameLetters.length === 1 ? sameLetters[0] : undefined;
+  return nearestName(symbol, unitSymbols);
+}

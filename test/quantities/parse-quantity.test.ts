@@ -50,7 +50,9 @@ describe('parseQuantity', () => {
     ['1.3 kg/(m^2 s)', 'massFlux', 1.3],
     ['1.3 kg/m^2/s', 'massFlux', 1.3],
     ['1.3 kg m^-2 s^-1', 'massFlux', 1.3],
-    ['1.3 kg·m⁻²'.replace('⁻²', '^-2') + '·s^-1', 'massFlux', 1.3],
+    ['1.3 kg·m⁻²·s⁻¹', 'massFlux', 1.3],
+    ['2 in', 'length', 0.0508],
+    ['950 hPa', 'pressure', 95000],
     ['120 W/(m² K)', 'heatTransferCoefficient', 120],
     ['1800 kg/m³', 'density', 1800],
     ['3000 1/h', 'spaceVelocity', 3000 / 3600],
@@ -124,7 +126,10 @@ describe('parseQuantity', () => {
     ['1 m²«^»2', 'bad_quantity'],
     ['1 «(»m', 'bad_quantity'],
     ['1 m«)»', 'bad_quantity'],
-    ['1 m«⁻»¹', 'bad_quantity'],
+    ['1« m⁻¹»', 'wrong_dimension'],
+    ['1 m«⁻»', 'bad_quantity'],
+    ['1 m^2«²»', 'bad_quantity'],
+    ['1 «000» mm', 'unknown_unit'],
     ['1 m «#» note', 'bad_quantity'],
     ['1 m«;»', 'bad_quantity'],
     ['1 «mm2»', 'unknown_unit'],
@@ -161,6 +166,39 @@ describe('parseQuantity', () => {
       expect(faults[0]!.expected).toContain('absolute');
     },
   );
+
+  it.each(['bar(g)', 'psi (g)', 'kPa(gauge)', 'bar(a)', 'psi(abs)'])(
+    'does not take what stands behind the pressure in %s for a unit',
+    (unit) => {
+      for (const text of [`3 ${unit}`, `3 1/${unit}`]) {
+        const faults: Fault[] = [];
+        expect(parseAnyQuantity(text, (fault) => faults.push(fault))).toBeUndefined();
+        expect(faults).toHaveLength(1);
+        expect(text.slice(faults[0]!.span.start, faults[0]!.span.end)).toBe(unit);
+        expect(`${faults[0]!.expected} ${faults[0]!.mend!}`).toContain('absolute');
+      }
+    },
+  );
+
+  it.each([
+    ['kelvin', 'K'],
+    ['KJ', 'kJ'],
+    ['sec', 's'],
+    ['Kmol', 'kmol'],
+    ['kgmol', 'kmol'],
+    ['psia', 'psi'],
+    ['celsius', 'degC'],
+    ['barr', 'bar'],
+    ['torrr', 'torr'],
+  ])('proposes for %s the unit %s', (unit, nearest) => {
+    expect(read(`3 ${unit}`, 'length').faults[0]!.mend).toBe(`did you mean \`${nearest}\`?`);
+  });
+
+  it('proposes nothing where capitals leave two readings, and mends marks inside numbers', () => {
+    expect(read('3 mw', 'length').faults[0]!.mend).toBeUndefined();
+    expect(read('12,5 mm', 'length').faults[0]!.mend).toContain('dot');
+    expect(read('1 000 mm', 'length').faults[0]!.mend).toContain('without spaces');
+  });
 
   it.each([
     ['120 W/(m^2 degC)', 'heatTransferCoefficient', 11, 15],
