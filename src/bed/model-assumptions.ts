@@ -14,12 +14,6 @@ const modelAssumptions: readonly ModelAssumption[] = [
     applies: () => true,
   },
   {
-    about: 'fluid',
-    statement: 'the gas is ideal',
-    source: 'case: fluid.equation_of_state',
-    applies: () => true,
-  },
-  {
     about: 'pellet',
     statement:
       'diffusivities and conductivity are constant within a pellet; fluxes follow Fick’s law for each species alone; total pressure in the pores equals that outside',

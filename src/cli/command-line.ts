@@ -4,13 +4,14 @@ import { UsageError, type Streams } from './streams.js';
 import { version } from './version.js';
 
 const epilogue = `Every dimensional value of a case carries its unit: 12 mm, 350 degC, 0.085 mol/(kg s bar^2).
-Results go to out/NAME, NAME being the case file's name, or to the folder given with --out: profile.csv,
-pellet.csv, summary.json and charts. A folder is written whole or not at all.
+Results go to out/NAME, NAME being the case file's name, or to the folder given with --out:
+profile.csv, pellet.csv, summary.json and charts. A folder is written whole or not at all.
 
-Exit status: 0 done; 2 the case or the command line is at fault, nothing written; 3 the run stopped short,
-what was computed is written; 1 anything else, a defect.
+Exit status: 0 done; 2 the case or the command line is at fault, nothing written; 3 the run
+stopped short, what was computed is written; 1 anything else, a defect.
 
-Estimates for study under the supervision of qualified engineers; local codes and licensed practice govern.`;
+Estimates for study under the supervision of qualified engineers; local codes and licensed
+practice govern.`;
 
 /**
  * Runs one command line.
@@ -58,6 +59,9 @@ function define(finish: (status: ExitStatus) => void, streams: Streams): Argv {
     .scriptName('bedwright')
     .usage('$0 <command>\n\nPacked-bed catalytic reactors with reaction and diffusion solved in the pellet.')
     .exitProcess(false)
+    .updateStrings({
+      'Not enough non-option arguments: got %s, need at least %s': 'Name at least one case file.',
+    })
     .strict()
     .recommendCommands()
     .version(version)

@@ -45,8 +45,10 @@ export function formatProblem(problem: Problem, fileName: string, sourceText: st
   const place = placeOf(sourceText, problem.span.start);
   const kind = problem.severity === 'warning' ? 'warning: ' : '';
   const path = problem.path === '' ? '' : `  ${visibleText(problem.path)}`;
+  // Of a file that could not be read there is no line to name.
+  const where = sourceText === '' ? '' : `:${place.line}:${place.column}`;
   const lines = [
-    `${visibleText(fileName)}:${place.line}:${place.column}${path}`,
+    `${visibleText(fileName)}${where}${path}`,
     `  ${kind}found ${visibleText(problem.found)}; expected ${visibleText(problem.expected)}`,
   ];
   if (problem.mend !== undefined) lines.push(`  ${visibleText(problem.mend)}`);

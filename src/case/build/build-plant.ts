@@ -23,9 +23,11 @@ export function buildFluid(
   bed: BedInput | undefined,
   assumptions: Assumption[],
 ): ReactorSpecification['fluid'] | undefined {
-  if (input.equation_of_state === undefined) {
-    assumptions.push({ about: 'fluid.equation_of_state', statement: 'ideal gas', source: 'default' });
-  }
+  assumptions.push({
+    about: 'fluid.equation_of_state',
+    statement: 'the gas is ideal',
+    source: input.equation_of_state === undefined ? 'default' : 'case: fluid.equation_of_state',
+  });
   const needsViscosity = bed !== undefined && bed.pressure_drop !== 'none';
   if (needsViscosity && input.viscosity === undefined) {
     problemAt(context, ['fluid'], {
