@@ -32,7 +32,7 @@ export async function commandLine(words: readonly string[], streams: Streams): P
         // A failure inside a command is not one of the command line.
         // eslint-disable-next-line @typescript-eslint/no-unnecessary-condition -- yargs hands in null, whatever its types say
         if (error && !message) throw error;
-        complaint ??= message;
+        complaint ??= message.startsWith('Not enough non-option') ? 'Name at least one case file.' : message;
       })
       .parseAsync([...words], {}, (_error, _argv, output) => {
         printed = output;
@@ -59,9 +59,6 @@ function define(finish: (status: ExitStatus) => void, streams: Streams): Argv {
     .scriptName('bedwright')
     .usage('$0 <command>\n\nPacked-bed catalytic reactors with reaction and diffusion solved in the pellet.')
     .exitProcess(false)
-    .updateStrings({
-      'Not enough non-option arguments: got %s, need at least %s': 'Name at least one case file.',
-    })
     .strict()
     .recommendCommands()
     .version(version)

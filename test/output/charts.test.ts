@@ -3,7 +3,7 @@ import { solveReactor } from '../../src/bed/solve-reactor.js';
 import type { ReactorSpecification } from '../../src/bed/reactor-specification.js';
 import { chartTable } from '../../src/output/charts/chart-table.js';
 import { spread } from '../../src/output/charts/labels-plugin.js';
-import { lineChart, pointsOf, type Point } from '../../src/output/charts/line-chart.js';
+import { lineChart, pointsOf } from '../../src/output/charts/line-chart.js';
 import { createChartRenderer } from '../../src/output/charts/render-chart.js';
 import { lineStyles } from '../../src/output/charts/theme.js';
 import { cooledOxidation } from '../bed/cooled-oxidation.js';
