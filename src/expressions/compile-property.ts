@@ -31,7 +31,7 @@ export function compileProperty(formula: CheckedFormula): CompiledProperty {
   const make = (node: number): PropertyOf =>
     instantiate(
       ['T', 'P'],
-      emitStatements(graph, [{ target: 'return', node }]).replace('return = ', 'return '),
+      emitStatements(graph, [{ target: 'return', node }]),
       noEquilibrium,
       noEquilibrium,
     ) as PropertyOf;

@@ -30,11 +30,11 @@ export function compileRates(
   const leaf = idealGasLeaf(graph, (speciesIndex) => concentrations[speciesIndex]!);
   const results = rates.map((rate) => lower(graph, rate, leaf));
   const inputs = [...concentrations, graph.input('T'), graph.input('P')];
-  const values = results.map((node, j): Assignment => ({ target: `r[q + ${j}]`, node }));
+  const values = results.map((node, j): Assignment => ({ target: `r[q + ${j}] =`, node }));
   const zero = graph.number(0);
   const derivatives = results.flatMap((node, j) =>
     differentiate(graph, node, inputs).flatMap((derivative, column): Assignment[] =>
-      derivative === zero ? [] : [{ target: `g[h + ${j * inputs.length + column}]`, node: derivative }],
+      derivative === zero ? [] : [{ target: `g[h + ${j * inputs.length + column}] =`, node: derivative }],
     ),
   );
   const functions = new Map<number, EquilibriumConstantFunction>();

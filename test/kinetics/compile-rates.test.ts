@@ -138,6 +138,8 @@ describe('compileRates against mathjs', () => {
     'k * T^1.7 * y.A^(1 + y.B)',
     'k * 2^(T / 500) * c.A',
     'K^y.A - n^y.B',
+    'k * p.A^(0.5 + 60 / T) * c.B^(y.A * 2)',
+    'c.A^-(y.B + 0.2)',
     'k * abs(c.A - c.B) * c.C',
     'k * abs(c.B - c.A)',
     '-k * -c.A - -c.B',
@@ -193,6 +195,25 @@ describe('compileRates at the edge', () => {
         for (const value of gradient[0]!) expect(Number.isFinite(value)).toBe(true);
       }
     }
+  });
+
+  it('is zero, with finite derivatives, for orders that vary with the state, at and below zero concentration', () => {
+    for (const concentration of [0, -1e-9]) {
+      const state = { ...nothing, concentrations: [concentration, 2, 0, 0] };
+      for (const law of ['c.A^(0.4 + 100 / T)', 'k * c.A^(1 + c.B)', 'c.B * p.A^(T / 400)']) {
+        const { rates, gradient } = compiled([law], state);
+        expect(rates[0]).toBe(0);
+        expect(gradient[0]!.map((value) => value + 0)).toEqual([0, 0, 0, 0, 0, 0]);
+      }
+    }
+    // A base that cannot vanish needs no guard; an order below zero has no value there.
+    expect(compiled(['c.A^-(0.4 + 100 / T)', '2^c.A'], nothing).rates).toEqual([Infinity, 1]);
+  });
+
+  it('lets what is no number through, however the law is guarded', () => {
+    const state = { ...nothing, concentrations: [Number.NaN, 2, 0, 0] };
+    const laws = ['c.A^0.63', 'sqrt(c.A)', 'c.A^(100 / T)', 'c.B^c.A', 'min(c.A, c.B)', 'abs(c.A)', 'c.A^2'];
+    expect(compiled(laws, state).rates).toEqual(laws.map(() => Number.NaN));
   });
 
   it('keeps the sign of whole orders below zero concentration', () => {

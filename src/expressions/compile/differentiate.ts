@@ -16,6 +16,7 @@ export function differentiate(graph: Graph, result: NodeId, inputs: readonly Nod
     const present = adjoints.get(to);
     adjoints.set(to, present === undefined ? amount : graph.add(present, amount));
   };
+  const naturalLogarithm = (a: NodeId): NodeId => graph.number(Math.log(graph.numberAt(a)!));
   // Operands always have smaller indices than what they belong to.
   for (let id = result; id >= 0; id--) {
     const adjoint = adjoints.get(id);
@@ -45,19 +46,18 @@ export function differentiate(graph: Graph, result: NodeId, inputs: readonly Nod
         break;
       case 'power': {
         const exponent = graph.numberAt(b);
-        if (exponent !== undefined) {
-          contribute(a, times(graph.multiply(b, graph.power(a, graph.number(exponent - 1)))));
-          break;
-        }
-        if (graph.numberAt(a) === undefined) {
-          contribute(a, times(graph.multiply(b, graph.power(a, graph.subtract(b, graph.number(1))))));
-        }
-        contribute(b, times(graph.multiply(id, graph.operation('log', a))));
+        // Otherwise the base is a number above 0: only the exponent varies.
+        if (exponent === undefined) contribute(b, times(graph.multiply(id, naturalLogarithm(a))));
+        else contribute(a, times(graph.multiply(b, graph.power(a, graph.number(exponent - 1)))));
         break;
       }
+      case 'varying_power':
+        contribute(a, times(graph.multiply(b, graph.guardedPower(a, graph.subtract(b, graph.number(1))))));
+        contribute(b, times(graph.multiply(id, graph.operation('guarded_log', a))));
+        break;
       case 'guarded_power': {
         const exponent = graph.numberAt(b)!;
-        contribute(a, times(graph.multiply(b, graph.guardedPower(a, exponent - 1))));
+        contribute(a, times(graph.multiply(b, graph.guardedPower(a, graph.number(exponent - 1)))));
         break;
       }
       case 'exp':
@@ -70,7 +70,7 @@ export function differentiate(graph: Graph, result: NodeId, inputs: readonly Nod
         contribute(a, graph.divide(adjoint, graph.multiply(a, graph.number(ln10))));
         break;
       case 'sqrt':
-        contribute(a, times(graph.multiply(graph.number(0.5), graph.guardedPower(a, -0.5))));
+        contribute(a, times(graph.multiply(graph.number(0.5), graph.guardedPower(a, graph.number(-0.5)))));
         break;
       case 'abs':
         contribute(a, times(graph.operation('sign', a)));
@@ -93,6 +93,7 @@ export function differentiate(graph: Graph, result: NodeId, inputs: readonly Nod
         break;
       case 'sign':
       case 'step':
+      case 'guarded_log':
       case 'equilibrium_slope':
         // Constant almost everywhere, or never differentiated again.
         break;

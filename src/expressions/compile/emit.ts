@@ -2,7 +2,7 @@ import type { Graph, GraphNode, NodeId } from './graph.js';
 
 type OperationNode = Extract<GraphNode, { kind: 'operation' }>;
 
-/** JavaScript of each operation, from the text of its operands. */
+/** JavaScript of each operation, from the text of its operands. The guards let what is no number pass: the solver reports it. */
 const templates: Readonly<Record<OperationNode['operation'], (a: string, b: string) => string>> = {
   add: (a, b) => `${a} + ${b}`,
   subtract: (a, b) => `${a} - ${b}`,
@@ -10,11 +10,13 @@ const templates: Readonly<Record<OperationNode['operation'], (a: string, b: stri
   divide: (a, b) => `${a} / ${b}`,
   negate: (a) => `-${a}`,
   power: (a, b) => `Math.pow(${a}, ${b})`,
-  guarded_power: (a, b) => `${a} > 0 ? Math.pow(${a}, ${b}) : 0`,
+  guarded_power: (a, b) => `${a} <= 0 ? 0 : Math.pow(${a}, ${b})`,
+  varying_power: (a, b) => `${a} <= 0 && ${b} > 0 ? 0 : Math.pow(${a}, ${b})`,
   exp: (a) => `Math.exp(${a})`,
   log: (a) => `Math.log(${a})`,
+  guarded_log: (a) => `${a} <= 0 ? 0 : Math.log(${a})`,
   log10: (a) => `Math.log10(${a})`,
-  sqrt: (a) => `${a} > 0 ? Math.sqrt(${a}) : 0`,
+  sqrt: (a) => `${a} <= 0 ? 0 : Math.sqrt(${a})`,
   abs: (a) => `Math.abs(${a})`,
   sign: (a) => `Math.sign(${a})`,
   min: (a, b) => `Math.min(${a}, ${b})`,
@@ -24,7 +26,7 @@ const templates: Readonly<Record<OperationNode['operation'], (a: string, b: stri
   equilibrium_slope: (a, b) => `dk(${a}, ${b})`,
 };
 
-/** An assignment at the end of the generated body: `target` is text of our own making, such as `r[q + 2]`. */
+/** A statement at the end of the generated body: what stands before the value is text of our own making, `r[q + 2] =` or `return`. */
 export interface Assignment {
   readonly target: string;
   readonly node: NodeId;
@@ -71,6 +73,6 @@ export function emitStatements(graph: Graph, assignments: readonly Assignment[])
   return [
     ...thermal.flatMap(statement),
     ...rest.flatMap(statement),
-    ...assignments.map(({ target, node }) => `${target} = ${operand(node)};`),
+    ...assignments.map(({ target, node }) => `${target} ${operand(node)};`),
   ].join('\n');
 }

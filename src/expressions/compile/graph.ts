@@ -6,6 +6,7 @@
 /** Node of the graph: an index into it. */
 export type NodeId = number;
 
+/** A number, an argument of the generated function, or an operation on other nodes. */
 export type GraphNode =
   | { readonly kind: 'number'; readonly value: number }
   /** Argument of the generated function, by its text: one of the fixed names of the emitter. */
@@ -17,8 +18,11 @@ export type GraphNode =
     };
 
 /**
- * - `guarded_power`: a^b with a fixed exponent b that is no whole number; 0 where a ≤ 0. Rates of fractional order then end at zero
- *   concentration instead of leaving the real numbers.
+ * - `guarded_power`: a^b, 0 where a ≤ 0, whatever b: powers with a fixed fractional exponent above 0, and the slopes of powers. Rates of
+ *   fractional order then end at zero concentration instead of leaving the real numbers.
+ * - `varying_power`: a^b with an exponent that varies; 0 where a ≤ 0 and b > 0
+ * - `guarded_log`: logarithm, 0 where a ≤ 0: beside a varying power, which is 0 there too
+ * - `sqrt`: 0 where the operand is below 0
  * - `step`: 1 where the first operand is at most the second, else 0
  * - `equilibrium`, `equilibrium_slope`: supplied functions of temperature; the operand is a number, the reaction's index
  */
@@ -30,8 +34,10 @@ export type Operation =
   | 'negate'
   | 'power'
   | 'guarded_power'
+  | 'varying_power'
   | 'exp'
   | 'log'
+  | 'guarded_log'
   | 'log10'
   | 'sqrt'
   | 'abs'
@@ -42,6 +48,7 @@ export type Operation =
   | 'equilibrium'
   | 'equilibrium_slope';
 
+/** The graph under construction; nodes are only ever added, operands before what they belong to. */
 export class Graph {
   readonly nodes: GraphNode[] = [];
   private readonly known = new Map<string, NodeId>();
@@ -112,7 +119,8 @@ export class Graph {
   power(a: NodeId, b: NodeId): NodeId {
     const [x, y] = [this.numberAt(a), this.numberAt(b)];
     if (x !== undefined && y !== undefined) return this.number(x ** y);
-    if (y === undefined) return this.operation('power', a, b);
+    // A base that is a number above 0 needs no guard.
+    if (y === undefined) return this.operation(x !== undefined && x > 0 ? 'power' : 'varying_power', a, b);
     if (y === 0) return this.number(1);
     if (y === 1) return a;
     if (Number.isInteger(y) && Math.abs(y) <= 8) {
@@ -122,11 +130,12 @@ export class Graph {
     return this.operation(Number.isInteger(y) || y < 0 ? 'power' : 'guarded_power', a, b);
   }
 
-  /** a^exponent where a > 0, else 0, whatever the sign of the exponent: derivatives of guarded powers. */
-  guardedPower(a: NodeId, exponent: number): NodeId {
+  /** a^b where a > 0, else 0, whatever the sign of the exponent: derivatives of guarded and varying powers. */
+  guardedPower(a: NodeId, b: NodeId): NodeId {
+    const exponent = this.numberAt(b);
     if (exponent === 0) return this.number(1);
     if (exponent === 1) return a;
-    return this.operation('guarded_power', a, this.number(exponent));
+    return this.operation('guarded_power', a, b);
   }
 
   operation(operation: Operation, ...operands: readonly NodeId[]): NodeId {

@@ -5,7 +5,7 @@
 
 const numeral = String.raw`\(?-?(?:\d+\.?\d*(?:e[+-]?\d+)?|Infinity|NaN)\)?`;
 const operand = String.raw`(?:t\d+|[TP]|${numeral})`;
-const value = String.raw`(?:${operand}|-${operand}|${operand} [-+*/] ${operand}|Math\.(?:pow|exp|log|log10|abs|sign|min|max)\(${operand}(?:, ${operand})?\)|${operand} > 0 \? Math\.(?:pow|sqrt)\(${operand}(?:, ${operand})?\) : 0|${operand} <= ${operand} \? 1 : 0|d?k\(${operand}, ${operand}\)|c\[o \+ \d+\])`;
+const value = String.raw`(?:${operand}|-${operand}|${operand} [-+*/] ${operand}|Math\.(?:pow|exp|log|log10|abs|sign|min|max)\(${operand}(?:, ${operand})?\)|${operand} <= 0(?: && ${operand} > 0)? \? 0 : Math\.(?:pow|sqrt|log)\(${operand}(?:, ${operand})?\)|${operand} <= ${operand} \? 1 : 0|d?k\(${operand}, ${operand}\)|c\[o \+ \d+\])`;
 const statement = new RegExp(
   String.raw`^(?:const t\d+ = ${value};|[rg]\[[qh] \+ \d+\] = ${operand};|return ${operand};)$`,
 );
