@@ -4,6 +4,7 @@
  */
 import type { ReportFault } from '../diagnostics/problem.js';
 
+/** A word of a formula and where it stands. */
 export interface FormulaToken {
   readonly kind: 'number' | 'name' | 'mark';
   readonly text: string;
@@ -45,6 +46,24 @@ const hints: Readonly<Record<string, string>> = {
   '³': 'write `^3`',
   _: 'names begin with a letter',
 };
+
+/** Words that the parser behind takes for operators or values of its own: never names here, except for species behind a dot. */
+const keptWords: ReadonlyMap<string, string | undefined> = new Map([
+  ['in', 'write `inch` for the unit'],
+  ['to', undefined],
+  ['mod', undefined],
+  ['not', undefined],
+  ['and', undefined],
+  ['or', undefined],
+  ['xor', undefined],
+  ['end', undefined],
+  ['true', undefined],
+  ['false', undefined],
+  ['null', undefined],
+  ['undefined', undefined],
+  ['NaN', undefined],
+  ['Infinity', undefined],
+]);
 
 /** Tokens in order; undefined (and one fault) where the text cannot be a formula. */
 export function scanFormula(text: string, report: ReportFault): FormulaToken[] | undefined {
@@ -98,6 +117,15 @@ export function scanFormula(text: string, report: ReportFault): FormulaToken[] |
       if (match[0] === '0' && /[xbo]/i.test(text.slice(end, end + 1))) {
         return refuse(start, end + 1, `\`${text.slice(start, end + 1)}\``, 'decimal numbers');
       }
+    }
+    if (kind === 'name' && keptWords.has(match[0]) && tokens.at(-1)?.text !== '.') {
+      return refuse(
+        start,
+        end,
+        `the word \`${match[0]}\``,
+        'a name that has no meaning of its own in formulas',
+        keptWords.get(match[0]),
+      );
     }
     if (match[0] === '(' && ++depth > deepest) {
       return refuse(

@@ -146,13 +146,13 @@ const tricks: readonly Trick[] = [
   { name: 'globalThis.process', text: 'globalThis.process', at: 'globalThis.process' },
   { name: 'require of a module', text: 'require(fs)', at: 'require' },
   // Constants of the parser's language that a user might not mean.
-  ...['i', 'pi', 'e', 'tau', 'phi', 'LN2', 'SQRT2', 'version', 'end'].map((name): Trick => ({
+  ...['i', 'pi', 'e', 'tau', 'phi', 'LN2', 'SQRT2', 'version'].map((name): Trick => ({
     name: `constant ${name}`,
     text: name,
     code: unknown,
     at: name,
   })),
-  ...['null', 'true', 'false', 'undefined', 'NaN', 'Infinity'].map((name): Trick => ({
+  ...['null', 'true', 'false', 'undefined', 'NaN', 'Infinity', 'end', 'in', 'mod'].map((name): Trick => ({
     name: `word ${name}`,
     text: `${name} * k`,
     at: name,
@@ -165,10 +165,10 @@ const tricks: readonly Trick[] = [
   { name: 'less than', text: 'k < 1', at: '<' },
   { name: 'equal', text: 'k == 1', at: '=' },
   { name: 'not equal', text: 'k != 1', at: '!' },
-  { name: 'and', text: 'k and k' },
-  { name: 'or', text: 'k or k' },
-  { name: 'xor', text: 'k xor k' },
-  { name: 'not', text: 'not k' },
+  { name: 'and', text: 'k and k', at: 'and' },
+  { name: 'or', text: 'k or k', at: 'or' },
+  { name: 'xor', text: 'k xor k', at: 'xor' },
+  { name: 'not', text: 'not k', at: 'not' },
   { name: 'ampersands', text: 'k && k', at: '&' },
   { name: 'bars', text: 'k || k', at: '|' },
   { name: 'magnitude bars', text: '|k|', at: '|' },
@@ -177,13 +177,14 @@ const tricks: readonly Trick[] = [
   { name: 'transpose', text: "k'", at: "'" },
   { name: 'percent', text: '5 %', at: '%' },
   { name: 'remainder', text: 'k % 2', at: '%' },
-  { name: 'mod', text: '5 mod k' },
+  { name: 'mod', text: '5 mod k', at: 'mod' },
   { name: 'elementwise product', text: 'k .* k' },
   { name: 'elementwise quotient', text: 'k ./ k' },
   { name: 'elementwise power', text: 'k .^ 2' },
   { name: 'double star', text: 'k ** 2', at: '*' },
-  { name: 'conversion by to', text: '5 to K' },
-  { name: 'conversion by in', text: '5 in K', code: unknown, at: 'in' },
+  { name: 'conversion by to', text: '5 to K', at: 'to' },
+  { name: 'conversion by in', text: '5 in K', at: 'in' },
+  { name: 'inch where the parser reads a conversion', text: '5 in', at: 'in' },
   { name: 'conversion of a quantity', text: '5 bar to Pa' },
   // Arguments.
   { name: 'exp of two', text: 'exp(1, 2)', at: 'exp(1, 2)' },
