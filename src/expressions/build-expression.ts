@@ -22,24 +22,29 @@ const binaryFunctions: Readonly<Record<Binary, (a: number, b: number) => number>
   max: Math.max,
 };
 
+/** A number, SI. */
 export function number(value: number): Expression {
   return { kind: 'number', value };
 }
 
+/** A variable. */
 export function variable(of: Variable): Expression {
   return { kind: 'variable', variable: of };
 }
 
+/** -operand, worked out where it is a number. */
 export function negate(operand: Expression): Expression {
   return operand.kind === 'number' ? number(-operand.value) : { kind: 'negate', operand };
 }
 
+/** A function of one argument, worked out where that is a number. */
 export function unary(name: UnaryFunction, operand: Expression): Expression {
   return operand.kind === 'number'
     ? number(unaryFunctions[name](operand.value))
     : { kind: 'unary', name, operand };
 }
 
+/** An operation on two operands, worked out where both are numbers. */
 export function binary(name: Binary, left: Expression, right: Expression): Expression {
   if (left.kind === 'number' && right.kind === 'number') {
     return number(binaryFunctions[name](left.value, right.value));

@@ -15,13 +15,16 @@ export type Variable =
   | { readonly kind: 'temperature' | 'pressure' | 'relative_radius' }
   | { readonly kind: 'equilibrium_constant'; readonly reactionIndex: number };
 
+/** Functions of one argument. `log` is the natural logarithm. */
 export type UnaryFunction = 'exp' | 'log' | 'log10' | 'sqrt' | 'abs';
+/** Functions of two arguments; more are nested. */
 export type BinaryFunction = 'min' | 'max';
+/** Arithmetic between two operands. */
 export type Operator = 'add' | 'subtract' | 'multiply' | 'divide' | 'power';
 
 /**
  * A checked formula: plain data, every number in SI, every name resolved, dimensions consistent.
- * Only `expressions/parse.ts` and `expressions/build.ts` make one; everything downstream trusts it.
+ * Only `parse-formula.ts` and `build-expression.ts` make one; everything downstream trusts it.
  */
 export type Expression =
   | { readonly kind: 'number'; readonly value: number }

@@ -2,6 +2,7 @@
 import { didYouMean } from '../diagnostics/nearest-name.js';
 import type { ProblemCode, ReportFault } from '../diagnostics/problem.js';
 
+/** An equation in numbers. */
 export interface ParsedEquation {
   /** One per species in case order; negative for what stands on the left. */
   readonly stoichiometry: readonly number[];

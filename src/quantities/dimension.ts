@@ -10,26 +10,32 @@ export type Dimension = readonly [
   temperature: number,
 ];
 
+/** The dimension of a pure number. */
 export const dimensionless: Dimension = [0, 0, 0, 0, 0];
 
 const exponentTolerance = 1e-9;
 
+/** Dimension of a product. */
 export function multiplyDimensions(a: Dimension, b: Dimension): Dimension {
   return [a[0] + b[0], a[1] + b[1], a[2] + b[2], a[3] + b[3], a[4] + b[4]];
 }
 
+/** Dimension of a quotient a/b. */
 export function divideDimensions(a: Dimension, b: Dimension): Dimension {
   return [a[0] - b[0], a[1] - b[1], a[2] - b[2], a[3] - b[3], a[4] - b[4]];
 }
 
+/** Dimension of a power; the exponent may be a fraction. */
 export function raiseDimension(a: Dimension, exponent: number): Dimension {
   return [a[0] * exponent, a[1] * exponent, a[2] * exponent, a[3] * exponent, a[4] * exponent];
 }
 
+/** Whether two dimensions agree; exponents that differ by rounding (1e-9) count as equal. */
 export function sameDimension(a: Dimension, b: Dimension): boolean {
   return a.every((exponent, index) => Math.abs(exponent - b[index]!) <= exponentTolerance);
 }
 
+/** Whether it is the dimension of a pure number. */
 export function isDimensionless(a: Dimension): boolean {
   return sameDimension(a, dimensionless);
 }

@@ -50,6 +50,7 @@ export type QuantityKindName =
   | 'molarEntropy'
   | 'fraction';
 
+/** The kinds by name; one dimension may belong to several. */
 export const quantityKinds: Readonly<Record<QuantityKindName, QuantityKind>> = {
   length: kind('length', [0, 1, 0, 0, 0], 'a length', '4 mm', ['m', 'mm', 'cm', 'inch', 'ft']),
   temperature: kind('temperature', [0, 0, 0, 0, 1], 'a temperature', '640 K', ['K', 'degC', 'degF'], true),
