@@ -15,6 +15,8 @@ await build({
   outdir: 'dist',
   bundle: true,
   splitting: true,
+  minifySyntax: true,
+  minifyWhitespace: true,
   format: 'esm',
   platform: 'node',
   target: 'node20',

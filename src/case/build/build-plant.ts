@@ -10,7 +10,7 @@ import type {
   SelectivityRequest,
 } from '../../bed/reactor-specification.js';
 import type { ReactionRecord } from '../../kinetics/reaction-record.js';
-import type { z } from 'zod';
+import type * as z from 'zod';
 import { problemAt, type CaseContext } from '../case-context.js';
 import type { BedInput, HeatInput, outputSchema, targetsSchema } from '../schema/bed-schema.js';
 import type { FluidInput } from '../schema/feed-schema.js';

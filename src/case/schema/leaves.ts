@@ -2,7 +2,7 @@
  * The kinds of value a case is made of, as zod schemas that yield SI numbers and checked formulas. Faults travel as `params` of zod's
  * custom issues and are placed in the file afterwards. Every leaf carries its description and what it accepts as metadata.
  */
-import { z } from 'zod';
+import * as z from 'zod';
 import { didYouMean } from '../../diagnostics/nearest-name.js';
 import type { Fault } from '../../diagnostics/problem.js';
 import type { CheckedFormula } from '../../expressions/expression.js';

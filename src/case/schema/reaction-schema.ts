@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import type { ConstantDefinition } from '../../expressions/build-expression.js';
 import { dimensionless, type Dimension } from '../../quantities/dimension.js';
 import {
