@@ -7,7 +7,7 @@ export const stopMessages: Readonly<Record<StopReason, string>> = {
   property_range_left:
     "The temperature leaves the range for which the species' heat capacities and enthalpies hold. Check the heat balance of the case; if the temperature is real, give data that cover it.",
   no_pellet_state:
-    'No steady state of the pellet was found here within the work allowed. The conditions may be near ignition or extinction of the pellet; check the rate laws and the pellet data at these conditions.',
+    'No steady state of the pellet was found here within the work allowed. The conditions may be past ignition or extinction of the pellet, or a law of an order below one leaves its core without reactant, which this version does not resolve. Check the rate laws and the pellet data at these conditions; `method: thiele` may serve where cores are empty.',
   reactant_overdrawn:
     'A species is used up here while a rate law goes on consuming it. Such a law holds only while there is enough of the species: add a factor that vanishes with it (an order above zero), or end the bed here.',
   step_limit:

@@ -37,6 +37,8 @@ const temperatureScale = 0.05;
 const overdrawnFraction = 1e-4;
 /** Shortest step in relative size when a pellet is grown. */
 const smallestGrowthStep = 1e-4;
+/** Iterations that growing may take: a pellet that exists at all is reached in some dozens. */
+const mostGrowthIterations = 300;
 
 export class CollocatedPellet {
   readonly grid: DiffusionGrid;
@@ -125,25 +127,23 @@ export class CollocatedPellet {
     this.hasSolution = true;
   }
 
-  /** Solves from the last solution; where that fails from bulk conditions throughout; where that fails by growing the pellet. */
+  /** Solves from the last solution; where that fails, from bulk conditions throughout. */
   solve(bulk: PelletBulk): PelletStatus {
-    this.work.solves++;
-    this.work.largestNodeCount = Math.max(this.work.largestNodeCount, this.grid.nodeCount);
-    this.prepare(bulk);
-    let status: PelletStatus = this.hasSolution ? this.iterate(bulk, 1) : 'no_state';
-    if (status !== 'converged') {
-      this.reset();
-      if (!this.evaluateNodes(bulk, 1, false)) return 'rates_not_finite';
-      status = this.iterate(bulk, 1);
-    }
-    if (status !== 'converged') status = this.grow(bulk);
-    if (status !== 'converged') {
-      this.reset();
-      return status;
-    }
-    this.hasSolution = true;
-    this.takeAverages();
-    return this.isOverdrawn(bulk) ? 'overdrawn' : 'converged';
+    this.begin(bulk);
+    if (this.hasSolution && this.iterate(bulk, 1) === 'converged') return this.conclude(bulk);
+    this.reset();
+    if (!this.evaluateNodes(bulk, 1, false)) return 'rates_not_finite';
+    if (this.iterate(bulk, 1) === 'converged') return this.conclude(bulk);
+    this.reset();
+    return 'no_state';
+  }
+
+  /** Solves by growing the pellet from one too small to matter, which reaches states that Newton's method alone does not. */
+  solveByGrowth(bulk: PelletBulk): PelletStatus {
+    this.begin(bulk);
+    if (this.grow(bulk) === 'converged') return this.conclude(bulk);
+    this.reset();
+    return 'no_state';
   }
 
   /** Fills `gradient` at the last solution, which must have converged at the same bulk conditions; false when the Jacobian is singular. */
@@ -216,6 +216,18 @@ export class CollocatedPellet {
     return rows;
   }
 
+  private begin(bulk: PelletBulk): void {
+    this.work.solves++;
+    this.work.largestNodeCount = Math.max(this.work.largestNodeCount, this.grid.nodeCount);
+    this.prepare(bulk);
+  }
+
+  private conclude(bulk: PelletBulk): PelletStatus {
+    this.hasSolution = true;
+    this.takeAverages();
+    return this.isOverdrawn(bulk) ? 'overdrawn' : 'converged';
+  }
+
   private prepare(bulk: PelletBulk): void {
     const { speciesCount } = this.input;
     const { fieldCount, independent, activeSpecies, diffusionCoefficients, filmCoefficients } = this.basis;
@@ -277,7 +289,9 @@ export class CollocatedPellet {
     const kept = this.unknowns.slice();
     let growth = 0;
     let step = 0.1;
+    const lastIteration = this.work.iterations + mostGrowthIterations;
     while (growth < 1) {
+      if (this.work.iterations > lastIteration) return 'no_state';
       const next = Math.min(1, growth + step);
       this.hasFactors = false;
       if (this.iterate(bulk, next) === 'converged') {

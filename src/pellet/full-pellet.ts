@@ -19,6 +19,8 @@ import {
 const firstRung = 2;
 /** Errors below this fraction of the tolerance allow one rung less. */
 const generousFraction = 1e-4;
+/** Rungs on which a pellet is grown when all else fails: a moderate single polynomial, then graded elements. */
+const growthRungs = [6, 10] as const;
 /** Rungs above the one in use for showing the inside. */
 const interiorRungs = 2;
 /**
@@ -57,18 +59,15 @@ export class FullPellet implements PelletModel {
     return this.current.gradient;
   }
 
-  /** Solves on the present grid; where that fails, on finer ones, since a grid too coarse for a thin zone can overshoot below zero. */
+  /**
+   * Solves on the present grid; where that fails, on finer ones, since a grid too coarse for a thin zone can overshoot below zero; where that
+   * fails too, by growing the pellet, on two grids at most.
+   */
   solve(bulk: PelletBulk): PelletStatus {
     this.lastBulk = bulk;
-    let status = this.current.solve(bulk);
-    for (let rung = this.rung + 1; status !== 'converged' && rung <= finestRung; rung++) {
-      if (status === 'rates_not_finite') break;
-      const finer = this.onRung(rung);
-      finer.reset();
-      status = finer.solve(bulk);
-      if (status === 'converged') this.use(rung);
-    }
-    return status;
+    const status = this.current.solve(bulk);
+    if (status === 'converged' || status === 'rates_not_finite') return status;
+    return this.rescue(bulk, status);
   }
 
   differentiate(bulk: PelletBulk): PelletStatus {
@@ -129,6 +128,27 @@ export class FullPellet implements PelletModel {
       break;
     }
     return this.rung > startRung ? 'raised' : 'adequate';
+  }
+
+  private rescue(bulk: PelletBulk, first: PelletStatus): PelletStatus {
+    // An overdrawn state on the finest grid is worth more to the user than none.
+    let status = first;
+    const finerRungs = Array.from({ length: finestRung - this.rung }, (_, k) => this.rung + 1 + k);
+    const attempts: readonly (readonly [rung: number, way: 'solve' | 'solveByGrowth'])[] = [
+      ...finerRungs.filter((rung) => (rung - this.rung) % 2 === 1).map((rung) => [rung, 'solve'] as const),
+      ...growthRungs.map((rung) => [Math.max(rung, this.rung), 'solveByGrowth'] as const),
+    ];
+    for (const [rung, way] of attempts) {
+      const pellet = this.onRung(rung);
+      pellet.reset();
+      const outcome = pellet[way](bulk);
+      if (outcome === 'converged') {
+        this.use(rung);
+        return outcome;
+      }
+      if (outcome === 'overdrawn') status = outcome;
+    }
+    return status;
   }
 
   private solvedBulk(): PelletBulk {

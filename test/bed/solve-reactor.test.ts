@@ -409,4 +409,17 @@ describe('events and ends', () => {
     expect(Number.isFinite(result.peak.temperature)).toBe(true);
     expect(result.peak.temperature).toBeGreaterThan(800);
   });
+
+  it('a pellet past its ignition ends the run with a reason and bounded work', () => {
+    const one = cooledOxidation();
+    const total = one.feed.molarFlows.reduce((sum, flow) => sum + flow, 0);
+    const fractions = [0.03, 0, 0.208, 0, 0, 0.762];
+    const result = solveReactor({
+      ...one,
+      feed: { ...one.feed, molarFlows: fractions.map((y) => y * total) },
+    });
+    expect(result.stop!.reason).toBe('no_pellet_state');
+    expect(result.stop!.position).toBeGreaterThan(0.01);
+    expect(result.work.pelletIterations).toBeLessThan(40_000);
+  });
 });

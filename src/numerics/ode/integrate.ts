@@ -27,8 +27,8 @@ const goodContraction = 1e-3;
 const keepStepBand: readonly [number, number] = [1, 1.2];
 /** Shrinking after a failed stage solution or a right side that could not be computed. */
 const failureShrink = 0.25;
-/** Steps shorter than this fraction of the interval end the integration. */
-const shortestStepFraction = 1e-13;
+/** Steps shorter than this fraction of the interval end the integration: the place is then known well enough for anyone. */
+const shortestStepFraction = 1e-10;
 
 /**
  * @param problem - right side and Jacobian
