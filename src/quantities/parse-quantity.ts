@@ -1,5 +1,6 @@
 import type { ReportFault, Span } from '../diagnostics/problem.js';
-import { dimensionless, formatDimension, sameDimension, type Dimension } from './dimension.js';
+import { describeDimension } from './describe-dimension.js';
+import { dimensionless, sameDimension, type Dimension } from './dimension.js';
 import { parseUnit, type ParsedUnit } from './parse-unit.js';
 import type { QuantityKind } from './quantity-kinds.js';
 
@@ -106,11 +107,6 @@ export function missingUnit(
 /** `a length or a temperature` */
 export function nouns(kinds: readonly QuantityKind[]): string {
   return kinds.map(({ noun }) => noun).join(' or ');
-}
-
-function describeDimension(dimension: Dimension): string {
-  const text = formatDimension(dimension);
-  return text === '1' ? 'dimensionless' : `${text} in SI`;
 }
 
 function splitNumber(text: string, report: ReportFault, expected: string): Split | undefined {

@@ -261,6 +261,36 @@ describe('parseFormula: what it refuses', () => {
     expect(read('expp(1)').faults[0]!.mend).toContain('exp');
   });
 
+  it.each([
+    ['3 m3', '`m^3`'],
+    ['3 barg', 'gauge'],
+    ['3 Kelvin', '`K`'],
+    ['3 KJ/mol', '`kJ`'],
+    ['3 + q', 'constants'],
+  ])('says for %s how a unit is written', (text, mend) => {
+    expect(read(text).faults).toMatchObject([{ code: 'unknown_name' }]);
+    expect(read(text).faults[0]!.mend).toContain(mend);
+  });
+
+  it('does not read 5 bar(g) as five bar grams', () => {
+    expect(read('5 bar(g)').faults).toMatchObject([{ code: 'bad_formula', span: { start: 2, end: 5 } }]);
+  });
+
+  it('names quantities and their units in faults of dimension', () => {
+    const [fault] = read('p.A + c.O2').faults;
+    expect(fault!.found).toBe(
+      '`p.A`, a pressure (kg m^-1 s^-2), added to `c.O2`, an amount per volume (m^-3 mol)',
+    );
+    expect(read('T - 273.15').faults[0]).toMatchObject({
+      found: '`T`, a temperature (K), less `273.15`, a pure number',
+      mend: 'give `273.15` its unit',
+    });
+    expect(read('exp(p.A)').faults[0]!.found).toBe(
+      '`p.A`, a pressure (kg m^-1 s^-2), as the argument of `exp`',
+    );
+    expect(read('1 + k').faults[0]!.found).toBe('`1`, a pure number, added to `k`, kg^-2 m s mol in SI');
+  });
+
   it('knows no temperature, pressure, species or K_eq where the scope has none', () => {
     const bare: FormulaScope = {
       constants: new Map(),
