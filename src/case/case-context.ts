@@ -53,7 +53,7 @@ export function reportAt(context: CaseContext, path: CasePath): ReportFault {
   return (fault: Fault) => {
     const { node } = locate(context.root, path);
     const isPlaced = node.kind === 'scalar' && node.textStart !== undefined;
-    const start = isPlaced ? node.textStart! : 0;
+    const start = isPlaced ? node.textStart : 0;
     const span = isPlaced
       ? { start: start + fault.span.start, end: start + fault.span.end }
       : spanAt(context, path);
@@ -68,6 +68,21 @@ export function problemAt(
   fault: Omit<Fault, 'span' | 'severity'> & Partial<Pick<Fault, 'severity'>>,
 ): void {
   context.report({ severity: 'error', ...fault, span: spanAt(context, path), path: formatPath(path) });
+}
+
+/** As {@link problemAt}, pointing at the key itself: for names that are wrong. */
+export function keyProblemAt(
+  context: CaseContext,
+  path: CasePath,
+  fault: Omit<Fault, 'span' | 'severity'>,
+): void {
+  const { keySpan } = locate(context.root, path);
+  context.report({
+    severity: 'error',
+    ...fault,
+    span: keySpan ?? spanAt(context, path),
+    path: formatPath(path),
+  });
 }
 
 /** Plain value of a node: maps as objects without a prototype. */

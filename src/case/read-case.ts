@@ -138,7 +138,7 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
     });
   }
   if (!records || !allReactions) return undefined;
-  if (!molarFlows || !fluid || !heat || !pellet || !bedInput || !feedInput) return undefined;
+  if (!molarFlows || !fluid || !heat || !pellet || !bedInput) return undefined;
   const specification: ReactorSpecification = {
     title,
     notes,
@@ -188,5 +188,5 @@ function checkKeys(context: CaseContext): void {
 
 /** The list where it has no hole. */
 function complete<Value>(list: readonly (Value | undefined)[] | undefined): readonly Value[] | undefined {
-  return list?.every((entry) => entry !== undefined) ? (list as readonly Value[]) : undefined;
+  return list?.every((entry) => entry !== undefined) ? list : undefined;
 }

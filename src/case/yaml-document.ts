@@ -38,7 +38,7 @@ const mostNodes = 20_000;
 
 /** @returns the root of the file; undefined where it cannot be read, with at least one problem reported */
 export function readYamlDocument(text: string, report: ReportProblem): CaseNode | undefined {
-  let faulty = false;
+  let faulty = false as boolean;
   const refuse = (
     code: Parameters<ReportProblem>[0]['code'],
     span: Span,
@@ -100,8 +100,7 @@ export function readYamlDocument(text: string, report: ReportProblem): CaseNode 
     );
     return undefined;
   }
-  refuseForbidden(document, refuse);
-  if (faulty) return undefined;
+  if (!refuseForbidden(document, refuse)) return undefined;
   return convert(document.contents, text, refuse);
 }
 
@@ -113,7 +112,13 @@ type Refuse = (
   mend?: string,
 ) => void;
 
-function refuseForbidden(document: Document.Parsed, refuse: Refuse): void {
+/** False where anything was refused. */
+function refuseForbidden(document: Document.Parsed, report: Refuse): boolean {
+  let isAllowed = true as boolean;
+  const refuse: Refuse = (...fault) => {
+    isAllowed = false;
+    report(...fault);
+  };
   let nodes = 0;
   visit(document, (_key, node, path) => {
     if (isPair(node)) return undefined;
@@ -147,6 +152,7 @@ function refuseForbidden(document: Document.Parsed, refuse: Refuse): void {
       refuse('yaml_forbidden', span, `the tag \`${tag}\``, 'values without tags', 'remove it');
     return undefined;
   });
+  return isAllowed;
 }
 
 function convert(node: ParsedNode | null, text: string, refuse: Refuse): CaseNode | undefined {
@@ -158,7 +164,7 @@ function convert(node: ParsedNode | null, text: string, refuse: Refuse): CaseNod
       kind: 'list',
       span,
       items: node.items.flatMap((item) => {
-        const converted = convert(item as ParsedNode | null, text, refuse);
+        const converted = convert(item, text, refuse);
         return converted ? [converted] : [];
       }),
     };
@@ -166,7 +172,7 @@ function convert(node: ParsedNode | null, text: string, refuse: Refuse): CaseNod
   if (!isMap(node)) return undefined;
   const entries = new Map<string, { keySpan: Span; value: CaseNode }>();
   for (const pair of node.items) {
-    const key = pair.key as ParsedNode;
+    const key = pair.key;
     const keySpan = { start: key.range[0], end: Math.max(key.range[1], key.range[0] + 1) };
     const name = isScalar(key) ? key.value : undefined;
     if (typeof name !== 'string' && typeof name !== 'number' && typeof name !== 'boolean') {
@@ -183,7 +189,12 @@ function convert(node: ParsedNode | null, text: string, refuse: Refuse): CaseNod
       refuse('duplicate_key', keySpan, `\`${word}\` a second time`, 'each key once', 'remove one of them');
       continue;
     }
-    const value = convert(pair.value as ParsedNode | null, text, refuse) ?? {
+    const written = pair.value;
+    // `length:` with nothing behind it: the fault is best shown at the key.
+    const isAbsent =
+      written === null ||
+      (isScalar(written) && written.value === null && written.range[0] === written.range[1]);
+    const value = (isAbsent ? undefined : convert(written, text, refuse)) ?? {
       kind: 'scalar',
       span: keySpan,
       value: null,

@@ -128,11 +128,9 @@ function splitNumber(text: string, report: ReportFault, expected: string): Split
   if (!(magnitude <= largest) || (magnitude < smallest && /[1-9]/.test(mantissa(match.groups!['number']!)))) {
     return refuse(`the number ${match.groups!['number']!}, which is out of all proportion`);
   }
-  return {
-    number,
-    unitText: text.slice(match[0].length).trimEnd().replace(/^\s+$/, ''),
-    unitOffset: match[0].length,
-  };
+  const rest = text.slice(match[0].length);
+  const unitText = rest.trim();
+  return { number, unitText, unitOffset: match[0].length + Math.max(0, rest.indexOf(unitText)) };
 }
 
 function mantissa(number: string): string {

@@ -102,7 +102,7 @@ describe('parseQuantity', () => {
     ['«1e-999 m»', 'bad_quantity'],
     ['«12»', 'missing_unit'],
     ['« 12 »', 'missing_unit'],
-    ['12« kg»', 'wrong_dimension'],
+    ['12 «kg»', 'wrong_dimension'],
     ['12 «furlong»', 'unknown_unit'],
     ['12 «M»', 'unknown_unit'],
     ['12 «MM»', 'unknown_unit'],
@@ -126,7 +126,7 @@ describe('parseQuantity', () => {
     ['1 m²«^»2', 'bad_quantity'],
     ['1 «(»m', 'bad_quantity'],
     ['1 m«)»', 'bad_quantity'],
-    ['1« m⁻¹»', 'wrong_dimension'],
+    ['1 «m⁻¹»', 'wrong_dimension'],
     ['1 m«⁻»', 'bad_quantity'],
     ['1 m^2«²»', 'bad_quantity'],
     ['1 «000» mm', 'unknown_unit'],
@@ -218,7 +218,7 @@ describe('parseQuantity', () => {
     const { id, dimension, noun, example, units } = quantityKinds.temperature;
     const kind = { id, dimension, noun, example, units };
     expect(parseQuantity('5 degC', [kind], (fault) => faults.push(fault))).toBeUndefined();
-    expect(faults).toMatchObject([{ code: 'bad_quantity', span: { start: 1, end: 6 } }]);
+    expect(faults).toMatchObject([{ code: 'bad_quantity', span: { start: 2, end: 6 } }]);
     expect(parseQuantity('5 K', [kind], (fault) => faults.push(fault))?.value).toBe(5);
   });
 
@@ -287,7 +287,7 @@ describe('parseAnyQuantity', () => {
   it('refuses a temperature scale, since a constant may mean a difference', () => {
     expect(any('25 degC')).toMatchObject({
       result: undefined,
-      faults: [{ code: 'bad_quantity', span: { start: 2, end: 7 } }],
+      faults: [{ code: 'bad_quantity', span: { start: 3, end: 7 } }],
     });
   });
 });

@@ -71,7 +71,7 @@ export function buildMolarFlows(
   if (given.length !== 1) {
     problemAt(context, given.length === 0 ? ['feed'] : ['feed', given[1]!], {
       code: given.length === 0 ? 'missing_key' : 'inconsistent',
-      found: given.length === 0 ? 'no flow in `feed`' : `${given.map((key) => `\`${key}\``).join(' and ')}`,
+      found: given.length === 0 ? 'no flow in `feed`' : given.map((key) => `\`${key}\``).join(' and '),
       expected: `exactly one of ${flowKeys.join(', ')} (or \`molar_flows\` of every species)`,
     });
   }

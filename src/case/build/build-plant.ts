@@ -107,7 +107,7 @@ export function buildHeat(context: CaseContext, input: HeatInput): HeatSpecifica
     }
     return { mode: input.mode };
   }
-  let isSound = true;
+  let isSound = true as boolean;
   const require = (isGiven: boolean, key: string, example: string): void => {
     if (isGiven) return;
     isSound = false;
@@ -135,7 +135,7 @@ export function checkHeatData(
   specification: Pick<ReactorSpecification, 'species' | 'reactions' | 'fluid' | 'feed'>,
 ): boolean {
   const { species, reactions, fluid, feed } = specification;
-  let isSound = true;
+  let isSound = true as boolean;
   const missing = (index: number, property: string, why: string): void => {
     isSound = false;
     const { id, source } = species[index]!;

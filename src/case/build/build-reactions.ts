@@ -6,7 +6,14 @@ import { parseEquation } from '../../kinetics/parse-equation.js';
 import type { RateBasis, ReactionRecord } from '../../kinetics/reaction-record.js';
 import { formatDimension, sameDimension, type Dimension } from '../../quantities/dimension.js';
 import { parseUnit } from '../../quantities/parse-unit.js';
-import { locate, problemAt, reportAt, type CaseContext, type CasePath } from '../case-context.js';
+import {
+  keyProblemAt,
+  locate,
+  problemAt,
+  reportAt,
+  type CaseContext,
+  type CasePath,
+} from '../case-context.js';
 import { readSection } from '../read-section.js';
 import { constantSchema, reactionSchema, type ReactionInput } from '../schema/reaction-schema.js';
 import { isIdentifier, type SpeciesSection } from './build-species.js';
@@ -220,7 +227,7 @@ function readConstants(context: CaseContext, path: CasePath, outer: Constants): 
   }
   for (const name of node.entries.keys()) {
     if (!isIdentifier(name) || reservedNames.has(name)) {
-      problemAt(context, [...path, name], {
+      keyProblemAt(context, [...path, name], {
         code: 'bad_identifier',
         found: `\`${name}\` as the name of a constant`,
         expected: reservedNames.has(name)

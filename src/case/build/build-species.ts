@@ -3,7 +3,7 @@ import { didYouMean } from '../../diagnostics/nearest-name.js';
 import { molarMassOf, parseChemicalFormula } from '../../properties/chemical-formula.js';
 import type { HeatCapacityData, NasaRange, SpeciesRecord } from '../../properties/species-record.js';
 import { findLibrarySpecies, librarySpeciesIds } from '../../properties/species/library.js';
-import { locate, problemAt, reportAt, type CaseContext } from '../case-context.js';
+import { keyProblemAt, locate, problemAt, reportAt, type CaseContext } from '../case-context.js';
 import { readSection } from '../read-section.js';
 import { speciesSchema, type HeatCapacityInput, type SpeciesInput } from '../schema/species-schema.js';
 
@@ -36,7 +36,7 @@ export function buildSpecies(context: CaseContext, assumptions: Assumption[]): S
   const records: (SpeciesRecord | undefined)[] = [];
   for (const id of node.entries.keys()) {
     if (!isIdentifier(id)) {
-      problemAt(context, ['species', id], {
+      keyProblemAt(context, ['species', id], {
         code: 'bad_identifier',
         found: `\`${id}\` as the id of a species`,
         expected: 'a letter, then letters, digits and underscores',

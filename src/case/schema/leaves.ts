@@ -33,7 +33,7 @@ export function describeValue(value: unknown): string {
   if (Array.isArray(value)) return 'a list';
   if (typeof value === 'object') return 'a map';
   if (typeof value === 'string') return value.length > 60 ? `\`${value.slice(0, 57)}…\`` : `\`${value}\``;
-  return String(value as number | boolean);
+  return typeof value === 'number' || typeof value === 'boolean' ? String(value) : 'something else';
 }
 
 interface Bounds {

@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import type { ConstantDefinition } from '../../expressions/build-expression.js';
-import { dimensionless, type Dimension } from '../../quantities/dimension.js';
+import type { Dimension } from '../../quantities/dimension.js';
 import {
   addFault,
   anyQuantity,
@@ -42,10 +42,7 @@ export const constantSchema: z.ZodType<ConstantInput> = z
   .unknown()
   .transform((value, context): ConstantInput => {
     if (!isMap(value)) {
-      const { value: number, dimension } = delegate(anyQuantity('value'), value, context) ?? {
-        value: 0,
-        dimension: dimensionless,
-      };
+      const { value: number, dimension } = delegate(anyQuantity('value'), value, context);
       return { kind: 'defined', definition: { kind: 'value', value: number }, dimension };
     }
     const read = delegate(constantMap, value, context);

@@ -21,7 +21,7 @@ const nasaRange = z
       .unknown()
       .transform((value, context): number[] => {
         const isList = Array.isArray(value) && value.every((entry) => typeof entry === 'number');
-        if (isList && (value.length === 7 || value.length === 9)) return value as number[];
+        if (isList && (value.length === 7 || value.length === 9)) return value;
         addFault(context, {
           code: 'wrong_value',
           found: Array.isArray(value) ? `a list of ${value.length} entries` : describeValue(value),
