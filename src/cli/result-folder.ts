@@ -40,7 +40,7 @@ export function folderNameOf(caseFile: string): string {
  * @throws UsageError
  */
 export function checkTarget(target: string): void {
-  const status = lstatSync(target, { throwIfNoEntry: false });
+  const status = statusOf(target);
   if (!status) return;
   if (status.isSymbolicLink()) throw new UsageError(`${target} is a symbolic link; name the folder itself`);
   if (!status.isDirectory()) throw new UsageError(`${target} is there already and is no folder`);
@@ -49,6 +49,14 @@ export function checkTarget(target: string): void {
     throw new UsageError(
       `${target} holds something else than a result of this tool; choose another folder with --out`,
     );
+  }
+}
+
+function statusOf(target: string): ReturnType<typeof lstatSync> {
+  try {
+    return lstatSync(target, { throwIfNoEntry: false });
+  } catch (error) {
+    throw asUsageError(error, target);
   }
 }
 
@@ -100,10 +108,7 @@ export function writeResultFolder(target: string, files: readonly ResultFile[]):
     if (hadResult) rmSync(retired, { recursive: true, force: true });
   } catch (error) {
     rmSync(partial, { recursive: true, force: true });
-    if (error instanceof UsageError) throw error;
-    const { code, message } = error as NodeJS.ErrnoException;
-    if (code === undefined) throw error;
-    throw new UsageError(`the results cannot be written to ${target}: ${reasons[code] ?? message}`);
+    throw asUsageError(error, target);
   } finally {
     unfinished.delete(partial);
   }
@@ -118,6 +123,13 @@ const reasons: Readonly<Record<string, string>> = {
   ENOTDIR: 'a part of the path is no folder',
   ENAMETOOLONG: 'the path is too long',
 };
+
+/** What the file system said, for the user; anything else is handed on as it is. */
+function asUsageError(error: unknown, target: string): unknown {
+  const { code, message } = error as NodeJS.ErrnoException;
+  if (error instanceof UsageError || code === undefined) return error;
+  return new UsageError(`the results cannot be written to ${target}: ${reasons[code] ?? message}`);
+}
 
 /** Exclusive creation, so that nothing that appeared meanwhile is followed or overwritten. */
 function writeDurably(path: string, content: string | Uint8Array): void {

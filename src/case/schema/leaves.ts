@@ -357,7 +357,3 @@ export function delegate<Output>(
 export function isMap(value: unknown): boolean {
   return typeof value === 'object' && value !== null && !Array.isArray(value);
 }
-
-export function isText(value: unknown): boolean {
-  return typeof value === 'string' || typeof value === 'number';
-}

@@ -7,8 +7,6 @@
 
 const root6 = Math.sqrt(6);
 
-export const stageCount = 3;
-
 /** Stage positions c. */
 export const stagePositions: readonly [number, number, number] = [(4 - root6) / 10, (4 + root6) / 10, 1];
 
