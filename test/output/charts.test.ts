@@ -150,7 +150,7 @@ describe('rendering', () => {
   it('gives PNG at twice the nominal size', () => {
     const png = small('title');
     expect([...png.subarray(0, 8)]).toEqual([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a]);
-    expect(size(png)).toEqual([1800, 1120]);
+    expect(size(png)).toEqual([1600, 1000]);
   });
 
   it('draws text: another title is another picture, the same title the same', () => {

@@ -30,7 +30,7 @@ export interface LineChart {
   readonly marks?: readonly { readonly x: number; readonly y: number; readonly label: string }[];
 }
 
-const longestSubtitle = 115;
+const longestSubtitle = 100;
 
 export function lineChart(chart: LineChart): ChartConfiguration<'line', Point[]> {
   const xs = chart.series.flatMap(({ points }) => points.map(({ x }) => x));

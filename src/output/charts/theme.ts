@@ -19,7 +19,7 @@ export const paper = '#ffffff';
 
 export const fontFamily = 'DejaVu Sans';
 /** CSS pixels; pictures have twice as many each way. */
-export const chartSize = { width: 900, height: 560 } as const;
+export const chartSize = { width: 800, height: 500 } as const;
 export const pixelRatio = 2;
 
 export function lineStyle(index: number): (typeof lineStyles)[number] {
