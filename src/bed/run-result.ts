@@ -32,7 +32,7 @@ export interface Profile {
   readonly moleFractions: readonly Float64Array[];
   /** mol/(kg s): averaged over the pellet, per catalyst mass; one column per reaction. */
   readonly rates: readonly Float64Array[];
-  /** Averaged rate over the rate at bulk conditions; NaN where the latter vanishes. One column per reaction. */
+  /** Averaged rate over the rate at bulk conditions; NaN where the latter is not told from zero (no reactant yet, equilibrium). One column per reaction. */
   readonly effectiveness: readonly Float64Array[];
   /** K */
   readonly surfaceTemperatures: Float64Array;

@@ -18,6 +18,18 @@ export interface Tabulation {
   readonly averageRates: readonly Float64Array[];
 }
 
+/**
+ * A net rate below this many tolerances of the one-way rates it is the difference of is not told from zero: near equilibrium an effectiveness
+ * would be noise over noise.
+ */
+const noiseFactor = 100;
+
+/** Σ |∂r/∂c_i| c_i: the size of the rates between which a net rate is the difference; a first-order rate itself. */
+function grossRate(gradient: Float64Array, reaction: number, concentrations: Float64Array): number {
+  const from = reaction * (concentrations.length + 2);
+  return concentrations.reduce((sum, c, i) => sum + Math.abs(gradient[from + i]! * c), 0);
+}
+
 /** Works out every column of the profile from the states of the bed; flows are multiplied up to the whole reactor. */
 export function tabulate(
   model: ReactorModel,
@@ -42,6 +54,8 @@ export function tabulate(
   const bulkRates = columns(reactionCount);
   const averageRates = columns(reactionCount);
   const atBulk = new Float64Array(reactionCount);
+  const gradient = new Float64Array(reactionCount * (speciesCount + 2));
+  const noise = noiseFactor * specification.numerics.tolerance;
   const { conditions } = balances;
 
   for (let row = 0; row < rowCount; row++) {
@@ -55,12 +69,14 @@ export function tabulate(
       molarFlows[i]![row] = conditions.flows[i]! * tubes;
       moleFractions[i]![row] = conditions.flows[i]! / conditions.totalFlow;
     }
-    model.rates.evaluate(
+    model.rates.evaluateWithGradient(
       conditions.concentrations,
       0,
       conditions.temperature,
       conditions.pressure,
       atBulk,
+      0,
+      gradient,
       0,
     );
     for (let j = 0; j < reactionCount; j++) {
@@ -69,7 +85,8 @@ export function tabulate(
       bulkRates[j]![row] = bulk;
       averageRates[j]![row] = average;
       rates[j]![row] = average / density;
-      effectiveness[j]![row] = bulk === 0 ? Number.NaN : average / bulk;
+      const gross = grossRate(gradient, j, conditions.concentrations) * rateFactors[j]!;
+      effectiveness[j]![row] = Math.abs(bulk) <= noise * gross ? Number.NaN : average / bulk;
     }
   }
   const { heat } = specification;

@@ -423,3 +423,12 @@ describe('events and ends', () => {
     expect(result.work.pelletIterations).toBeLessThan(40_000);
   });
 });
+
+describe('effectiveness', () => {
+  it('is undefined where the net rate is not told from zero, and finite everywhere else', () => {
+    // Cooled tube: the third reaction has no fuel at the inlet.
+    const { effectiveness } = solveReactor(cooledOxidation()).profile;
+    expect(Number.isNaN(effectiveness[2]![0]!)).toBe(true);
+    for (const column of effectiveness) expect(column.slice(1).every((value) => value > 0 && value < 200)).toBe(true);
+  });
+});
