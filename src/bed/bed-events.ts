@@ -110,10 +110,16 @@ export function createBedEvents(model: ReactorModel, balances: Balances): BedEve
     'reactant_overdrawn',
     -1,
     true,
-    () => Math.min(...conditions.flows) - lowestFlow,
+    () => smallest(conditions.flows) - lowestFlow,
     () => 'a species is used up while its reaction goes on',
   );
   return events;
+}
+
+function smallest(values: Float64Array): number {
+  let least = Infinity;
+  for (let i = 0; i < values.length; i++) least = Math.min(least, values[i]!);
+  return least;
 }
 
 function kelvin(temperature: number): string {

@@ -371,9 +371,9 @@ export class CollocatedPellet {
   private isOverdrawn(bulk: PelletBulk): boolean {
     const { concentrations } = this.nodes;
     let largest = 0;
-    for (const value of bulk.concentrations) largest = Math.max(largest, value);
+    for (let i = 0; i < bulk.concentrations.length; i++) largest = Math.max(largest, bulk.concentrations[i]!);
     const lowest = -overdrawnFraction * largest;
-    for (const value of concentrations) if (value < lowest) return true;
+    for (let n = 0; n < concentrations.length; n++) if (concentrations[n]! < lowest) return true;
     return false;
   }
 }

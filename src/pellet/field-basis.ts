@@ -19,7 +19,7 @@ export interface FieldBasis {
   /** Reactions whose heats are the heats of the fields. */
   readonly independent: readonly number[];
   /** Species that take part, ascending; the others keep their bulk concentration. */
-  readonly activeSpecies: readonly number[];
+  readonly activeSpecies: Int32Array;
   /** Row-major `fieldCount × speciesCount`: ν_ik / De_i. */
   readonly diffusionCoefficients: Float64Array;
   /** Row-major `fieldCount × speciesCount`: ν_ik L / kc_i. */
@@ -55,7 +55,7 @@ export function createFieldBasis(input: PelletModelInput): FieldBasis {
     fieldCount,
     combination,
     independent,
-    activeSpecies,
+    activeSpecies: Int32Array.from(activeSpecies),
     diffusionCoefficients,
     filmCoefficients,
     inverseConductivity,

@@ -56,27 +56,29 @@ export class PelletNodes {
     growth: number,
     withGradient: boolean,
   ): boolean {
-    const { concentrations, temperatures, rates, basis, input } = this;
+    const { concentrations, temperatures, rates, basis, input, sources, rateGradient } = this;
     const { speciesCount, rateFactors } = input;
     const { nodeCount, unknownCount } = this.grid;
     const { fieldCount, combination, activeSpecies, hasFilm } = basis;
+    const { diffusionCoefficients, filmCoefficients, inverseConductivity, filmHeatResistance } = basis;
+    const activeCount = activeSpecies.length;
     const reactionCount = rateFactors.length;
+    const bulkConcentrations = bulk.concentrations;
     const laws = input.rates;
     for (let m = 0; m < nodeCount; m++) {
       const row = m * speciesCount;
-      for (let i = 0; i < speciesCount; i++) concentrations[row + i] = bulk.concentrations[i]!;
+      for (let i = 0; i < speciesCount; i++) concentrations[row + i] = bulkConcentrations[i]!;
       let temperature = bulk.temperature;
       for (let k = 0; k < fieldCount; k++) {
         const potential = m < unknownCount ? unknowns[k * unknownCount + m]! : 0;
         const average = hasFilm ? growth * unknowns[fieldCount * unknownCount + k]! : 0;
         const start = k * speciesCount;
-        for (const i of activeSpecies) {
+        for (let a = 0; a < activeCount; a++) {
+          const i = activeSpecies[a]!;
           concentrations[row + i]! +=
-            basis.diffusionCoefficients[start + i]! * potential +
-            basis.filmCoefficients[start + i]! * average;
+            diffusionCoefficients[start + i]! * potential + filmCoefficients[start + i]! * average;
         }
-        temperature +=
-          fieldHeats[k]! * (basis.inverseConductivity * potential + basis.filmHeatResistance * average);
+        temperature += fieldHeats[k]! * (inverseConductivity * potential + filmHeatResistance * average);
       }
       temperatures[m] = temperature;
       const rateRow = m * reactionCount;
@@ -89,7 +91,7 @@ export class PelletNodes {
           bulk.pressure,
           rates,
           rateRow,
-          this.rateGradient,
+          rateGradient,
           gradientRow,
         );
       } else {
@@ -101,7 +103,7 @@ export class PelletNodes {
           source += combination[k * reactionCount + j]! * rateFactors[j]! * rates[rateRow + j]!;
         }
         if (!(Math.abs(source) < Infinity)) return false;
-        this.sources[k * nodeCount + m] = source;
+        sources[k * nodeCount + m] = source;
       }
     }
     return true;
@@ -112,6 +114,7 @@ export class PelletNodes {
     const { basis, rateGradient } = this;
     const { speciesCount, rateFactors } = this.input;
     const { fieldCount, activeSpecies } = basis;
+    const activeCount = activeSpecies.length;
     const reactionCount = rateFactors.length;
     const columns = speciesCount + 2;
     for (let m = 0; m < this.grid.nodeCount; m++) {
@@ -123,7 +126,8 @@ export class PelletNodes {
           let potential = heat * basis.inverseConductivity;
           let average = heat * basis.filmHeatResistance;
           const start = k * speciesCount;
-          for (const i of activeSpecies) {
+          for (let a = 0; a < activeCount; a++) {
+            const i = activeSpecies[a]!;
             const byConcentration = rateGradient[from + i]!;
             potential += byConcentration * basis.diffusionCoefficients[start + i]!;
             average += byConcentration * basis.filmCoefficients[start + i]!;

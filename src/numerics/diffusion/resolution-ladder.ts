@@ -34,8 +34,12 @@ export interface ResolutionLadder {
   readonly grid: (rung: number) => DiffusionGrid;
 }
 
+/** Grids are immutable and follow from the exponent alone, so all ladders of one exponent share them; the last few exponents are kept. */
+const sharedGrids = new Map<number, Map<number, DiffusionGrid>>();
+const mostExponentsKept = 8;
+
 export function createResolutionLadder(shapeExponent: number): ResolutionLadder {
-  const made = new Map<number, DiffusionGrid>();
+  const made = gridsOf(shapeExponent);
   return {
     grid(rung) {
       const known = made.get(rung);
@@ -54,4 +58,14 @@ export function createResolutionLadder(shapeExponent: number): ResolutionLadder 
       return grid;
     },
   };
+}
+
+function gridsOf(shapeExponent: number): Map<number, DiffusionGrid> {
+  const known = sharedGrids.get(shapeExponent);
+  if (known) return known;
+  const oldest = sharedGrids.keys().next();
+  if (sharedGrids.size >= mostExponentsKept && !oldest.done) sharedGrids.delete(oldest.value);
+  const grids = new Map<number, DiffusionGrid>();
+  sharedGrids.set(shapeExponent, grids);
+  return grids;
 }
