@@ -24,7 +24,7 @@ export interface DiffusionGrid {
   readonly green: Float64Array;
   /** Volume averages: Σ weights · q, length `nodeCount`, sum 1. */
   readonly weights: Float64Array;
-  /** Coefficients with which nodal ψ (length `unknownCount`) give ψ at relative radius x. */
+  /** Coefficients with which nodal ψ (length `unknownCount`) give ψ at relative radius x; not to be written to. */
   readonly interpolationAt: (x: number) => Float64Array;
 }
 
@@ -46,7 +46,7 @@ export function singlePolynomialGrid(shapeExponent: number, nodeCount: number): 
     positions: nodes.map(Math.sqrt),
     green: flatten(inverse(Matrix.mul(laplacian, -1))),
     weights: interpolatoryWeights(nodes, lowerExponent),
-    interpolationAt: (x) => lagrangeValues(nodes, x * x).slice(0, nodeCount),
+    interpolationAt: remembered((x) => lagrangeValues(nodes, x * x).slice(0, nodeCount)),
   };
 }
 
@@ -122,7 +122,7 @@ export function elementGrid(
     positions: Float64Array.from(elements.flatMap(({ interior }) => [...interior.map(Math.sqrt)])),
     green: flatten(green),
     weights: normalised(Float64Array.from(elements.flatMap(({ weights }) => [...weights]))),
-    interpolationAt: (x) => {
+    interpolationAt: remembered((x) => {
       const u = x * x;
       const e = Math.max(
         0,
@@ -140,7 +140,21 @@ export function elementGrid(
         }
       });
       return coefficients;
-    },
+    }),
+  };
+}
+
+/** Positions asked for are few and come again: nodes of the neighbouring grids, radii of the output. */
+const mostRemembered = 400;
+
+function remembered(compute: (x: number) => Float64Array): (x: number) => Float64Array {
+  const known = new Map<number, Float64Array>();
+  return (x) => {
+    const there = known.get(x);
+    if (there) return there;
+    const made = compute(x);
+    if (known.size < mostRemembered) known.set(x, made);
+    return made;
   };
 }
 
