@@ -10,12 +10,14 @@ import type { Json } from '../output/summary.js';
 import { significant, table, wrap } from '../output/terminal-report.js';
 import { gravest, type ExitStatus } from './exit-status.js';
 import { loadCase } from './load-case.js';
+import { reportDefect } from './report-defect.js';
 import type { Streams } from './streams.js';
 
 export interface CheckOptions {
   readonly cases: readonly string[];
   readonly quiet: boolean;
   readonly json: boolean;
+  readonly debug: boolean;
 }
 
 /** Everything short of integrating: faults, warnings, assumptions, dimensionless groups at the inlet. Writes no file. */
@@ -58,7 +60,7 @@ function checkOne(
           `${visibleText(specification.title)}: no faults found`,
           `At the inlet\n${table(rows)}`,
           `Taken for granted\n${notes.join('\n')}`,
-        ].join('\n\n') + '\n',
+        ].join('\n\n') + (options.cases.length > 1 ? '\n\n' : '\n'),
       );
     }
     const problems = reportProblems(warnings, path, source);
@@ -73,7 +75,11 @@ function checkOne(
       },
     };
   } catch (error) {
-    if (!(error instanceof CaseError)) throw error;
+    if (!(error instanceof CaseError)) {
+      streams.error(`${visibleText(path)}: ${reportDefect(error, options.debug)}`);
+      const message = error instanceof Error ? error.message : String(error);
+      return { status: 1, outcome: { case: path, exit_status: 1, problems: [], message } };
+    }
     if (!options.json) streams.error(`${formatCaseError(error)}\n\n`);
     const problems = reportProblems(error.problems, error.fileName, error.sourceText);
     return { status: 2, outcome: { case: path, exit_status: 2, problems: problems as unknown as Json } };

@@ -1,5 +1,7 @@
 import yargs, { type Argv } from 'yargs';
+import { didYouMean } from '../diagnostics/nearest-name.js';
 import type { ExitStatus } from './exit-status.js';
+import { reportDefect, visibleLines } from './report-defect.js';
 import { UsageError, type Streams } from './streams.js';
 import { version } from './version.js';
 
@@ -8,10 +10,18 @@ Results go to out/NAME, NAME being the case file's name, or to the folder given 
 profile.csv, pellet.csv, summary.json and charts. A folder is written whole or not at all.
 
 Exit status: 0 done; 2 the case or the command line is at fault, nothing written; 3 the run
-stopped short, what was computed is written; 1 anything else, a defect.
+stopped short, what was computed is written; 1 anything else, a defect. With several cases the
+gravest counts: 1, then 2, then 3.
 
 Estimates for study under the supervision of qualified engineers; local codes and licensed
 practice govern.`;
+
+const commandNames = ['run', 'check', 'completion'];
+const commonOptions = ['--quiet', '--json', '--debug', '--help', '--version'];
+const runOptions = ['--out', '--charts', '--no-charts'];
+
+/** What the command line asks for, once it is known to be without fault. */
+type Action = () => Promise<ExitStatus>;
 
 /**
  * Runs one command line.
@@ -20,47 +30,72 @@ practice govern.`;
  * @returns the exit status; never throws for the user's mistakes
  */
 export async function commandLine(words: readonly string[], streams: Streams): Promise<ExitStatus> {
-  let status: ExitStatus | undefined;
+  let action: Action | undefined;
   let printed = '';
   let complaint: string | undefined;
-  const parser = define((outcome) => {
-    status = outcome;
+  const parser = define((chosen) => {
+    action = chosen;
   }, streams);
   try {
     await parser
       .fail((message, error) => {
-        // A failure inside a command is not one of the command line.
         // eslint-disable-next-line @typescript-eslint/no-unnecessary-condition -- yargs hands in null, whatever its types say
         if (error && !message) throw error;
-        complaint ??= message.startsWith('Not enough non-option') ? 'Name at least one case file.' : message;
+        complaint ??= reword(message, words);
       })
-      .parseAsync([...words], {}, (_error, _argv, output) => {
+      .parseAsync(plainWords(words), {}, (_error, _argv, output) => {
         printed = output;
       });
+    // yargs calls the command's handler in spite of a complaint, so that nothing may be done before this line.
     if (complaint !== undefined) throw new UsageError(complaint);
+    if (printed !== '') streams.out(`${printed}\n`);
+    return action === undefined ? 0 : await action();
   } catch (error) {
-    if (!(error instanceof UsageError)) return reportDefect(error, words, streams);
-    streams.error(`${error.message}\nSee \`bedwright --help\`.\n`);
+    if (!(error instanceof UsageError)) {
+      streams.error(reportDefect(error, words.includes('--debug')));
+      return 1;
+    }
+    streams.error(`${visibleLines(error.message)}\nSee \`bedwright --help\`.\n`);
     return 2;
   }
-  if (printed !== '') streams.out(`${printed}\n`);
-  return status ?? (printed === '' ? 2 : 0);
 }
 
-function define(finish: (status: ExitStatus) => void, streams: Streams): Argv {
-  const caseFiles = (command: Argv): Argv<{ cases: string[] }> =>
-    command.positional('cases', {
-      type: 'string',
-      array: true,
-      demandOption: true,
-      describe: 'case files (YAML)',
-    });
+/** Words behind `--` are case files, even with a dash in front. */
+function plainWords(words: readonly string[]): string[] {
+  const end = words.indexOf('--');
+  if (end < 0) return [...words];
+  const files = words.slice(end + 1).map((word) => (word.startsWith('-') ? `./${word}` : word));
+  return [...words.slice(0, end), ...files];
+}
+
+/** The complaint of yargs in our words, with the nearest command or option. */
+function reword(message: string, words: readonly string[]): string {
+  if (message.startsWith('Not enough non-option')) return 'Name at least one case file.';
+  const unknown = /^Unknown (?:argument|command)s?: (.*)$/s.exec(message)?.[1]?.split(', ');
+  if (unknown === undefined) return message;
+  const first = words.find((word) => !word.startsWith('-')) ?? '';
+  if (!commandNames.includes(first) && unknown.includes(first)) {
+    return complain('command', first, commandNames);
+  }
+  const known = first === 'run' ? [...commonOptions, ...runOptions] : commonOptions;
+  const asTyped = (name: string): string =>
+    words.includes(name) ? name : `${name.length === 1 ? '-' : '--'}${name}`;
+  return unknown.map((name) => complain('argument', asTyped(name), known)).join('\n');
+}
+
+function complain(what: string, name: string, known: readonly string[]): string {
+  const hint = didYouMean(name, known);
+  return `Unknown ${what}: ${name}${hint === undefined ? '' : `; ${hint}`}`;
+}
+
+function define(choose: (action: Action) => void, streams: Streams): Argv {
   return yargs()
     .scriptName('bedwright')
     .usage('$0 <command>\n\nPacked-bed catalytic reactors with reaction and diffusion solved in the pellet.')
     .exitProcess(false)
+    .locale('en')
+    .parserConfiguration({ 'camel-case-expansion': false, 'dot-notation': false })
     .strict()
-    .recommendCommands()
     .version(version)
     .help()
     .alias('help', 'h')
@@ -69,7 +104,7 @@ function define(finish: (status: ExitStatus) => void, streams: Streams): Argv {
       'run <cases..>',
       'solve cases and write profiles, charts and a summary',
       (command) =>
-        caseFiles(command)
+        common(command)
           .option('out', {
             type: 'string',
             requiresArg: true,
@@ -80,39 +115,48 @@ function define(finish: (status: ExitStatus) => void, streams: Streams): Argv {
             default: true,
             describe: 'draw charts; --no-charts leaves them out',
           })
-          .option('quiet', { type: 'boolean', default: false, describe: 'print faults only' })
-          .option('json', { type: 'boolean', default: false, describe: 'print the outcome as JSON' })
-          .option('debug', { type: 'boolean', default: false, describe: 'show where a defect happened' })
           .example('$0 run cases/salt-cooled-oxidation.yaml', 'results in out/salt-cooled-oxidation')
           .example('$0 run a.yaml b.yaml --out study --no-charts', 'results in study/a and study/b'),
-      async ({ cases, out, quiet, json, charts }) => {
-        const { runCommand } = await import('./run-command.js');
-        finish(await runCommand({ cases, out, quiet, json, charts }, streams));
-      },
+      ({ cases, out, quiet, json, charts, debug }) =>
+        choose(async () => {
+          // Of an option given twice yargs makes an array, whatever its types say.
+          if (Array.isArray(out)) throw new UsageError('Give --out once.');
+          if (out === '') throw new UsageError('--out names no folder.');
+          const { runCommand } = await import('./run-command.js');
+          return runCommand({ cases, out, quiet, json, charts, debug }, streams);
+        }),
     )
     .command(
       'check <cases..>',
       'look for faults, list assumptions and the groups at the inlet; writes nothing',
-      (command) =>
-        caseFiles(command)
-          .option('quiet', { type: 'boolean', default: false, describe: 'print faults only' })
-          .option('json', { type: 'boolean', default: false, describe: 'print the outcome as JSON' })
-          .option('debug', { type: 'boolean', default: false, describe: 'show where a defect happened' })
-          .example('$0 check cases/*.yaml', 'check every case of a folder'),
-      async ({ cases, quiet, json }) => {
-        const { checkCommand } = await import('./check-command.js');
-        finish(checkCommand({ cases, quiet, json }, streams));
-      },
+      (command) => common(command).example('$0 check cases/*.yaml', 'check every case of a folder'),
+      ({ cases, quiet, json, debug }) =>
+        choose(async () => {
+          const { checkCommand } = await import('./check-command.js');
+          return checkCommand({ cases, quiet, json, debug }, streams);
+        }),
     )
     .completion('completion', 'print a script for shell completion')
     .demandCommand(1, 'Say what to do: `bedwright run CASE` or `bedwright check CASE`.')
     .epilogue(epilogue);
 }
 
-function reportDefect(error: unknown, words: readonly string[], streams: Streams): ExitStatus {
-  const text = error instanceof Error ? error.message : String(error);
-  streams.error(`A defect of bedwright: ${text}\n`);
-  if (words.includes('--debug') && error instanceof Error) streams.error(`${error.stack ?? ''}\n`);
-  else streams.error('Please report it with the case and the output of the same command with --debug.\n');
-  return 1;
+interface CommonOptions {
+  cases: string[];
+  quiet: boolean;
+  json: boolean;
+  debug: boolean;
+}
+
+function common(command: Argv): Argv<CommonOptions> {
+  return command
+    .positional('cases', {
+      type: 'string',
+      array: true,
+      demandOption: true,
+      describe: 'case files (YAML)',
+    })
+    .option('quiet', { type: 'boolean', default: false, describe: 'print faults only' })
+    .option('json', { type: 'boolean', default: false, describe: 'print the outcome as JSON' })
+    .option('debug', { type: 'boolean', default: false, describe: 'show where a defect happened' });
 }

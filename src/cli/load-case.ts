@@ -7,6 +7,8 @@ import { CaseError } from '../diagnostics/case-error.js';
 
 export interface LoadedCase extends ReadCase {
   readonly fileName: string;
+  /** The file as it is. */
+  readonly bytes: Uint8Array;
   readonly source: string;
   /** SHA-256 of the file's bytes. */
   readonly hash: string;
@@ -17,7 +19,7 @@ export function loadCase(path: string): LoadedCase {
   const bytes = readBytes(path);
   const source = decodeCase(bytes, path);
   const hash = createHash('sha256').update(bytes).digest('hex');
-  return { ...readCase(source, path), fileName: basename(path), source, hash };
+  return { ...readCase(source, path), fileName: basename(path), bytes, source, hash };
 }
 
 function readBytes(path: string): Uint8Array {

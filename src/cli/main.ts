@@ -1,26 +1,23 @@
 #!/usr/bin/env node
 import { commandLine } from './command-line.js';
-import { removeUnfinished } from './result-folder.js';
 
-// A reader that stops reading (`| head`) is no defect.
+const closed = new Set<NodeJS.WriteStream>();
 for (const stream of [process.stdout, process.stderr]) {
   stream.on('error', (error: NodeJS.ErrnoException) => {
-    if (error.code === 'EPIPE') process.exit(0);
-    throw error;
+    closed.add(stream);
+    // A reader that stops reading (`| head`) is no fault; the results are still written.
+    if (error.code === 'EPIPE') return;
+    if (stream === process.stdout) write(process.stderr, `The output cannot be printed: ${error.message}\n`);
+    process.exit(2);
   });
 }
-for (const [signal, status] of [
-  ['SIGINT', 130],
-  ['SIGTERM', 143],
-] as const) {
-  process.on(signal, () => {
-    removeUnfinished();
-    process.exit(status);
-  });
+
+function write(stream: NodeJS.WriteStream, text: string): void {
+  if (!closed.has(stream)) stream.write(text);
 }
 
 process.exitCode = await commandLine(process.argv.slice(2), {
-  out: (text) => process.stdout.write(text),
-  error: (text) => process.stderr.write(text),
+  out: (text) => write(process.stdout, text),
+  error: (text) => write(process.stderr, text),
   useColour: process.stdout.isTTY && !process.env['NO_COLOR'],
 });

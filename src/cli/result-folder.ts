@@ -40,44 +40,47 @@ export function folderNameOf(caseFile: string): string {
  * @throws UsageError
  */
 export function checkTarget(target: string): void {
-  const status = statusOf(target);
+  // Without a slash at the end, behind which a symbolic link would pass for its folder.
+  const absolute = resolve(target);
+  const status = refusedAs(target, () => lstatSync(absolute, { throwIfNoEntry: false }));
   if (!status) return;
   if (status.isSymbolicLink()) throw new UsageError(`${target} is a symbolic link; name the folder itself`);
   if (!status.isDirectory()) throw new UsageError(`${target} is there already and is no folder`);
-  const names = readdirSync(target);
-  if (names.length > 0 && !isResult(target)) {
+  const names = refusedAs(target, () => readdirSync(absolute));
+  if (names.length === 0) return;
+  const own = filesOfResult(absolute);
+  if (own === undefined) {
     throw new UsageError(
       `${target} holds something else than a result of this tool; choose another folder with --out`,
     );
   }
+  const foreign = names.find((name) => !own.includes(name));
+  if (foreign !== undefined) {
+    throw new UsageError(
+      `${target} holds ${foreign} beside an earlier result; move it away, or choose another folder with --out`,
+    );
+  }
 }
 
-function statusOf(target: string): ReturnType<typeof lstatSync> {
+function refusedAs<Value>(target: string, look: () => Value): Value {
   try {
-    return lstatSync(target, { throwIfNoEntry: false });
+    return look();
   } catch (error) {
     throw asUsageError(error, target);
   }
 }
 
-function isResult(folder: string): boolean {
+/** Names of the files of an earlier result; undefined where a folder holds none. */
+function filesOfResult(folder: string): readonly unknown[] | undefined {
   try {
-    const summary = JSON.parse(readFileSync(join(folder, markerFile), 'utf8')) as {
-      provenance?: { tool?: unknown };
+    const { provenance } = JSON.parse(readFileSync(join(folder, markerFile), 'utf8')) as {
+      provenance?: { tool?: unknown; files?: unknown };
     };
-    return summary.provenance?.tool === 'bedwright';
+    const files: unknown = provenance?.files;
+    return provenance?.tool === 'bedwright' && Array.isArray(files) ? files : undefined;
   } catch {
-    return false;
+    return undefined;
   }
-}
-
-/** Folders being written now; removed when the process is told to stop. */
-const unfinished = new Set<string>();
-
-/** Removes what has been begun and not finished. */
-export function removeUnfinished(): void {
-  for (const folder of unfinished) rmSync(folder, { recursive: true, force: true });
-  unfinished.clear();
 }
 
 /**
@@ -89,12 +92,11 @@ export function writeResultFolder(target: string, files: readonly ResultFile[]):
   const absolute = resolve(target);
   const parent = dirname(absolute);
   const tag = randomBytes(6).toString('hex');
-  const partial = join(parent, `.${basename(absolute)}.${tag}.partial`);
-  const retired = join(parent, `.${basename(absolute)}.${tag}.old`);
+  const partial = join(parent, `.bedwright-${tag}.partial`);
+  const retired = join(parent, `.bedwright-${tag}.old`);
   try {
     checkTarget(absolute);
     mkdirSync(parent, { recursive: true });
-    unfinished.add(partial);
     mkdirSync(partial);
     for (const { name, content } of files) writeDurably(join(partial, name), content);
     const hadResult = lstatSync(absolute, { throwIfNoEntry: false }) !== undefined;
@@ -105,12 +107,19 @@ export function writeResultFolder(target: string, files: readonly ResultFile[]):
       if (hadResult) renameSync(retired, absolute);
       throw error;
     }
-    if (hadResult) rmSync(retired, { recursive: true, force: true });
+    if (hadResult) removeRetired(retired, target);
   } catch (error) {
     rmSync(partial, { recursive: true, force: true });
     throw asUsageError(error, target);
-  } finally {
-    unfinished.delete(partial);
+  }
+}
+
+function removeRetired(retired: string, target: string): void {
+  try {
+    rmSync(retired, { recursive: true, force: true });
+  } catch (error) {
+    const { message } = error as Error;
+    throw new UsageError(`the results are in ${target}, but the earlier ones stay in ${retired}: ${message}`);
   }
 }
 
@@ -126,8 +135,8 @@ const reasons: Readonly<Record<string, string>> = {
 
 /** What the file system said, for the user; anything else is handed on as it is. */
 function asUsageError(error: unknown, target: string): unknown {
-  const { code, message } = error as NodeJS.ErrnoException;
-  if (error instanceof UsageError || code === undefined) return error;
+  const { code, errno, message } = error as NodeJS.ErrnoException;
+  if (code === undefined || errno === undefined) return error;
   return new UsageError(`the results cannot be written to ${target}: ${reasons[code] ?? message}`);
 }
 

@@ -10,6 +10,8 @@ export interface Provenance {
   readonly caseFile: string;
   /** SHA-256 of the case file's bytes, hexadecimal. */
   readonly caseHash: string;
+  /** Names of all files of the result; a folder that holds others is not overwritten. */
+  readonly files: readonly string[];
 }
 
 /** What JSON can hold. */
@@ -101,6 +103,7 @@ export function summarise(
       version: provenance.version,
       case_file: provenance.caseFile,
       case_sha256: provenance.caseHash,
+      files: [...provenance.files],
     },
     caution,
   };
