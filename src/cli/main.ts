@@ -1,4 +1,5 @@
 #!/usr/bin/env node
+import { isatty } from 'node:tty';
 import { commandLine } from './command-line.js';
 
 const closed = new Set<NodeJS.WriteStream>();
@@ -19,5 +20,5 @@ function write(stream: NodeJS.WriteStream, text: string): void {
 process.exitCode = await commandLine(process.argv.slice(2), {
   out: (text) => write(process.stdout, text),
   error: (text) => write(process.stderr, text),
-  useColour: process.stdout.isTTY && !process.env['NO_COLOR'],
+  useColour: isatty(1) && !process.env['NO_COLOR'] && process.env['TERM'] !== 'dumb',
 });
