@@ -429,6 +429,7 @@ describe('effectiveness', () => {
     // Cooled tube: the third reaction has no fuel at the inlet.
     const { effectiveness } = solveReactor(cooledOxidation()).profile;
     expect(Number.isNaN(effectiveness[2]![0]!)).toBe(true);
-    for (const column of effectiveness) expect(column.slice(1).every((value) => value > 0 && value < 200)).toBe(true);
+    for (const column of effectiveness)
+      expect(column.slice(1).every((value) => value > 0 && value < 200)).toBe(true);
   });
 });
