@@ -7,7 +7,7 @@ import {
   visibleText,
 } from '../diagnostics/format-problem.js';
 import type { Json } from '../output/summary.js';
-import { significant, table, wrap } from '../output/terminal-report.js';
+import { bullet, significant, table } from '../output/terminal-report.js';
 import { gravest, type ExitStatus } from './exit-status.js';
 import { loadCase } from './load-case.js';
 import { reportDefect } from './report-defect.js';
@@ -50,10 +50,7 @@ function checkOne(
         `${significant(value, 4)}${unit === '1' ? '' : ` ${unit}`}`,
       ]);
       const notes = assumptions.map(({ about, statement, source: origin }) =>
-        wrap(visibleText(`${about}: ${statement} (${origin})`), 96)
-          .split('\n')
-          .map((line, index) => `${index === 0 ? '  - ' : '    '}${line}`)
-          .join('\n'),
+        bullet(visibleText(`${about}: ${statement} (${origin})`)),
       );
       streams.out(
         [

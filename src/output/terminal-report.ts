@@ -8,6 +8,8 @@ import { caution } from './caution.js';
 type Row = readonly [name: string, value: string];
 
 const zeroCelsius = 273.15;
+/** Characters in a line of prose. */
+const lineWidth = 100;
 
 /** What a run came to, for a person at a terminal: key figures, events, warnings, and last the caution. */
 export function terminalReport(
@@ -19,13 +21,13 @@ export function terminalReport(
   const sections = [
     colour.bold(visibleText(specification.title)),
     ...(result.stop
-      ? [colour.red(`Stopped at ${metres(result.stop.position)}: ${result.stop.message}`)]
+      ? [colour.red(wrap(`Stopped at ${metres(result.stop.position)}: ${result.stop.message}`, lineWidth))]
       : []),
     table(keyFigures(result, specification)),
-    ...list('Along the bed', result.events, ({ position, message }) => `${metres(position)}  ${message}`),
-    `${result.assumptions.length} assumptions are listed in summary.json.`,
-    ...list('Warnings', result.warnings, (warning) => colour.yellow(visibleText(warning))),
-    colour.dim(wrap(caution, 100)),
+    ...list('Along the bed', result.events, ({ position, message }) => `${metres(position)}: ${message}`),
+    `The assumptions made, ${result.assumptions.length} in number, are listed in summary.json.`,
+    ...list('Warnings', result.warnings, visibleText, colour.yellow),
+    colour.dim(wrap(caution, lineWidth)),
   ];
   return sections.join('\n\n');
 }
@@ -34,8 +36,11 @@ export function terminalReport(
 export function keyFigures(result: RunResult, specification: ReactorSpecification): readonly Row[] {
   const { speciesIds, reactionNames, outlet, peak } = result;
   const rows: Row[] = [
-    ['outlet temperature', temperature(outlet.temperature)],
-    ['outlet pressure', `${significant(outlet.pressure / 1e5, 5)} bar`],
+    [result.stop ? 'temperature where stopped' : 'outlet temperature', temperature(outlet.temperature)],
+    [
+      result.stop ? 'pressure where stopped' : 'outlet pressure',
+      `${significant(outlet.pressure / 1e5, 5)} bar`,
+    ],
     ['pressure drop', `${significant(result.pressureDrop / 1e5, 3)} bar`],
   ];
   if (specification.heat.mode !== 'isothermal') {
@@ -53,7 +58,10 @@ export function keyFigures(result: RunResult, specification: ReactorSpecificatio
   }
   result.effectiveness.forEach(({ inlet, mean, outlet: out }, j) => {
     const values = [inlet, mean, out].map((value) => (value === null ? '–' : significant(value, 3)));
-    rows.push([`effectiveness of ${reactionNames[j]!}`, `${values.join(' / ')}  inlet / mean / outlet`]);
+    rows.push([
+      `effectiveness of ${reactionNames[j]!}`,
+      `${values.join(' / ')}  inlet / mean / ${result.stop ? 'where stopped' : 'outlet'}`,
+    ]);
   });
   if (result.heatRemoved !== null && specification.heat.mode !== 'adiabatic') {
     rows.push(['heat removed', `${significant(result.heatRemoved / 1e3, 4)} kW`]);
@@ -100,10 +108,20 @@ export function table(rows: readonly Row[]): string {
     .join('\n');
 }
 
-/** A heading and indented lines; nothing at all where there are none. */
-function list<Entry>(heading: string, entries: readonly Entry[], text: (entry: Entry) => string): string[] {
+/** A heading and entries with a dash, wrapped; nothing at all where there are none. */
+function list<Entry>(
+  heading: string,
+  entries: readonly Entry[],
+  text: (entry: Entry) => string,
+  paint: (text: string) => string = String,
+): string[] {
   if (entries.length === 0) return [];
-  return [[heading, ...entries.map((entry) => `  ${text(entry)}`)].join('\n')];
+  return [[heading, ...entries.map((entry) => paint(bullet(text(entry))))].join('\n')];
+}
+
+/** One entry of a list: a dash, then lines indented alike. */
+export function bullet(text: string): string {
+  return `  - ${wrap(text, lineWidth - 4).replaceAll('\n', '\n    ')}`;
 }
 
 /** Breaks at spaces. */
@@ -117,8 +135,9 @@ export function wrap(text: string, width: number): string {
   return lines.join('\n');
 }
 
-/** Plain notation where it is short, else an exponent. */
+/** Plain notation where it is short, else an exponent; a dash for what is no number. */
 export function significant(value: number, digits: number): string {
+  if (!Number.isFinite(value)) return '–';
   if (value === 0) return '0';
   const magnitude = Math.abs(value);
   if (magnitude >= 1e6 || magnitude < 1e-3) return value.toExponential(digits - 1);
