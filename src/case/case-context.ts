@@ -1,10 +1,13 @@
 import type { Fault, Problem, ReportFault, Span } from '../diagnostics/problem.js';
-import type { CaseNode } from './yaml-document.js';
+import { offsetInFile } from './offset-in-file.js';
+import type { CaseNode } from './case-node.js';
 
 export type CasePath = readonly (string | number)[];
 
 /** The file being read, and where its faults go. */
 export interface CaseContext {
+  /** The whole text. */
+  readonly source: string;
   readonly root: CaseNode;
   readonly report: (problem: Problem) => void;
 }
@@ -46,17 +49,18 @@ export function spanAt(context: CaseContext, path: CasePath): Span {
 }
 
 /**
- * Receives faults of the text at a path: their offsets are moved to the file where the text stands there letter for letter (one-line values
- * without escapes); else they point at the whole value.
+ * Receives faults of the text at a path: their offsets are moved to where those characters stand in the file; where they stand there in another
+ * form (escapes), faults point at the whole value.
  */
 export function reportAt(context: CaseContext, path: CasePath): ReportFault {
   return (fault: Fault) => {
-    const { node } = locate(context.root, path);
-    const isPlaced = node.kind === 'scalar' && node.textStart !== undefined;
-    const start = isPlaced ? node.textStart : 0;
-    const span = isPlaced
-      ? { start: start + fault.span.start, end: start + fault.span.end }
-      : spanAt(context, path);
+    const { node, isExact } = locate(context.root, path);
+    const isText = isExact && node.kind === 'scalar';
+    const start = isText ? offsetInFile(context.source, node, fault.span.start) : undefined;
+    const last = isText
+      ? offsetInFile(context.source, node, Math.max(fault.span.start, fault.span.end - 1))
+      : undefined;
+    const span = start === undefined || last === undefined ? spanAt(context, path) : { start, end: last + 1 };
     context.report({ ...fault, span, path: formatPath(path) });
   };
 }

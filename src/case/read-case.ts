@@ -5,22 +5,17 @@
 import type { Assumption, ReactorSpecification } from '../bed/reactor-specification.js';
 import { CaseError } from '../diagnostics/case-error.js';
 import type { Problem } from '../diagnostics/problem.js';
-import type { ReactionRecord } from '../kinetics/reaction-record.js';
 import { buildMolarFlows } from './build/build-feed.js';
 import { buildPellet } from './build/build-pellet.js';
-import {
-  buildBed,
-  buildFluid,
-  buildHeat,
-  buildOutput,
-  buildTargets,
-  checkHeatData,
-} from './build/build-plant.js';
-import { buildCaseConstants, buildReactions } from './build/build-reactions.js';
+import { buildBed, buildFluid, buildHeat, buildOutput, buildTargets } from './build/build-plant.js';
+import { readConstants } from './build/build-constants.js';
+import { buildReactions } from './build/build-reactions.js';
 import { buildSpecies } from './build/build-species.js';
 import { checkEquilibrium } from './build/check-equilibrium.js';
-import { locate, problemAt, type CaseContext } from './case-context.js';
-import { readSection, reportUnknownKey } from './read-section.js';
+import { checkSpeciesData } from './build/check-species-data.js';
+import { complete } from './build/holes.js';
+import { problemAt, type CaseContext } from './case-context.js';
+import { readKeys, readSection, reportUnknownKey } from './read-section.js';
 import {
   bedSchema,
   heatSchema,
@@ -67,7 +62,7 @@ export function readCase(source: string, fileName: string): ReadCase {
     problems.push(problem);
   };
   const root = readYamlDocument(source, report);
-  const specification = root && readRoot({ root, report });
+  const specification = root && readRoot({ source, root, report });
   if (problems.some(({ severity }) => severity === 'error') || !specification) {
     if (problems.length === 0) throw new Error('a case came to nothing without a reported problem');
     throw new CaseError(fileName, source, problems);
@@ -92,42 +87,41 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
   readSection(context, ['start'], word(['cold'], 'branch where several pellet states exist', ['hot']));
   readSection(context, ['studies'], later('`studies`'));
   readSection(context, ['species_files'], later('`species_files`'));
+
   const species = buildSpecies(context, assumptions);
-  const reactions = buildReactions(context, species, buildCaseConstants(context));
+  const reactions = buildReactions(context, species, readConstants(context, ['constants'], new Map()));
   const bedInput = readSection(context, ['bed'], bedSchema);
-  const feedInput = readSection(context, ['feed'], feedSchema);
-  const molarFlows = feedInput && species && buildMolarFlows(context, feedInput, species, bedInput);
-  const heatInput = readSection(context, ['heat'], heatSchema);
-  const heat = heatInput && buildHeat(context, heatInput);
-  const hasFluid = locate(context.root, ['fluid']).isExact;
-  const fluidInput = hasFluid ? readSection(context, ['fluid'], fluidSchema) : {};
-  const fluid = fluidInput && buildFluid(context, fluidInput, bedInput, assumptions);
+  const feed = readKeys(context, ['feed'], feedSchema);
+  const molarFlows = feed && species && buildMolarFlows(context, feed, species, bedInput);
+  const heatReading = readKeys(context, ['heat'], heatSchema);
+  const heat = heatReading && buildHeat(context, heatReading);
+  const heatMode = heatReading?.values.mode;
+  const fluidReading = readKeys(context, ['fluid'], fluidSchema);
+  const isFluidRead = fluidReading !== undefined || !root.entries.has('fluid');
+  const fluid = isFluidRead ? buildFluid(context, fluidReading, bedInput, assumptions) : undefined;
   const limits = readSection(context, ['limits'], limitsSchema) ?? {};
-  const targets = readSection(context, ['targets'], targetsSchema);
+  const targets = readSection(context, ['targets'], targetsSchema) ?? {};
   const output = readSection(context, ['output'], outputSchema) ?? {};
   const numerics = readSection(context, ['numerics'], numericsSchema) ?? {};
-  const pelletInput = readSection(context, ['pellet'], pelletSchema);
+  const pelletReading = readKeys(context, ['pellet'], pelletSchema);
 
-  const knownReactions = (reactions ?? []).filter((entry): entry is ReactionRecord => entry !== undefined);
-  const allReactions = complete(reactions);
-  const records = complete(species?.records);
+  const stoichiometries = reactions?.stoichiometries ?? [];
   const pellet =
-    pelletInput &&
+    pelletReading &&
     species &&
-    allReactions &&
-    buildPellet(context, pelletInput, {
+    buildPellet(context, pelletReading, {
       speciesIds: species.ids,
-      reactionNames: allReactions.map(({ name }) => name),
-      isActive: species.ids.map((_id, i) => allReactions.some(({ stoichiometry }) => stoichiometry[i] !== 0)),
-      heat: heatInput,
+      reactionNames: reactions?.names ?? [undefined],
+      isActive: species.ids.map((_id, i) => stoichiometries.some((row) => row !== undefined && row[i] !== 0)),
+      heatMode,
       assumptions,
     });
-  const targetList = species ? (buildTargets(context, targets ?? {}, species.ids, molarFlows) ?? []) : [];
+  const targetList = species ? buildTargets(context, targets, species.ids, molarFlows) : [];
   const outputSpecification = buildOutput(
     context,
     output,
-    species?.ids ?? [],
-    knownReactions,
+    species?.ids,
+    reactions?.records,
     bedInput?.length,
   );
   if (numerics.tolerance === undefined) {
@@ -137,14 +131,20 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
       source: 'default',
     });
   }
-  if (!records || !allReactions) return undefined;
-  if (!molarFlows || !fluid || !heat || !pellet || !bedInput) return undefined;
+  const { temperature, pressure } = feed?.values ?? {};
+  if (!species || !reactions) return undefined;
+  const parts = { species, ...reactions, molarFlows, fluid, heatMode, temperature, pressure };
+  const isSound = checkSpeciesData(context, { ...parts, reactions: reactions.records });
+  const records = complete(species.records);
+  const allReactions = complete(reactions.records);
+  if (!isSound || !records || !allReactions || !molarFlows || !fluid || !heat || !pellet) return undefined;
+  if (!bedInput || temperature === undefined || pressure === undefined) return undefined;
   const specification: ReactorSpecification = {
     title,
     notes,
     species: records,
     reactions: allReactions,
-    feed: { temperature: feedInput.temperature, pressure: feedInput.pressure, molarFlows },
+    feed: { temperature, pressure, molarFlows },
     fluid,
     pellet,
     bed: buildBed(bedInput, assumptions),
@@ -158,7 +158,6 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
     numerics: { tolerance: numerics.tolerance ?? defaultTolerance },
     assumptions,
   };
-  if (heat.mode !== 'isothermal' && !checkHeatData(context, specification)) return undefined;
   return checkEquilibrium(context, specification) ? specification : undefined;
 }
 
@@ -184,9 +183,4 @@ function checkKeys(context: CaseContext): void {
       expected: `\`bedwright: ${formatVersion}\``,
     });
   }
-}
-
-/** The list where it has no hole. */
-function complete<Value>(list: readonly (Value | undefined)[] | undefined): readonly Value[] | undefined {
-  return list?.every((entry) => entry !== undefined) ? list : undefined;
 }

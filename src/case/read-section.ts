@@ -1,4 +1,5 @@
 import type * as z from 'zod';
+import { listNames } from '../diagnostics/list-names.js';
 import { didYouMean } from '../diagnostics/nearest-name.js';
 import {
   formatPath,
@@ -27,6 +28,62 @@ export function readSection<Output>(
   if ('data' in read) return read.data;
   for (const issue of read.issues) reportIssue(context, path, issue);
   return undefined;
+}
+
+/** A section read key by key: a fault in one of them leaves a hole, and the others still count. */
+export interface SectionReading<Output> {
+  /** Undefined for a key that is absent or at fault. */
+  readonly values: { readonly [Key in keyof Output]?: Output[Key] | undefined };
+  /** Whether the key stands in the file, rightly or wrongly. */
+  readonly isGiven: (key: keyof Output) => boolean;
+  /** Whether every key was right, none missing and none unknown. */
+  readonly isSound: boolean;
+}
+
+/**
+ * Reads the map at a path, each key for itself, and reports faults, unknown keys and missing ones.
+ *
+ * @returns undefined where no map stands there (reported, unless nothing stands there at all)
+ */
+export function readKeys<Shape extends Readonly<Record<string, z.ZodType>>>(
+  context: CaseContext,
+  path: CasePath,
+  schema: z.ZodObject<Shape, z.core.$strict>,
+): SectionReading<z.output<z.ZodObject<Shape, z.core.$strict>>> | undefined {
+  const { node, isExact } = locate(context.root, path);
+  if (!isExact) return undefined;
+  if (node.kind !== 'map') {
+    problemAt(context, path, {
+      code: 'wrong_type',
+      found: describeValue(plainValue(node)),
+      expected: 'a map of keys and values',
+    });
+    return undefined;
+  }
+  const shape: Readonly<Record<string, z.ZodType>> = schema.shape;
+  const known = Object.keys(shape);
+  let isSound = true;
+  for (const key of node.entries.keys()) {
+    if (known.includes(key)) continue;
+    isSound = false;
+    reportUnknownKey(context, path, key, known);
+  }
+  const values: Record<string, unknown> = {};
+  for (const key of known) {
+    const entry = node.entries.get(key);
+    const read = readWith(shape[key]!, entry && plainValue(entry.value));
+    if ('data' in read) {
+      values[key] = read.data;
+      continue;
+    }
+    isSound = false;
+    for (const issue of read.issues) reportIssue(context, path, { ...issue, path: [key, ...issue.path] });
+  }
+  return {
+    values: values as SectionReading<z.output<z.ZodObject<Shape, z.core.$strict>>>['values'],
+    isGiven: (key) => node.entries.has(String(key)),
+    isSound,
+  };
 }
 
 function reportIssue(context: CaseContext, sectionPath: CasePath, issue: z.core.$ZodIssue): void {
@@ -80,7 +137,7 @@ export function reportUnknownKey(
     path: formatPath([...path, key]),
     span: entry?.keySpan ?? node.span,
     found: `the key \`${key}\`, which means nothing here`,
-    expected: `one of ${known.join(', ')}`,
+    expected: `one of ${listNames(known)}`,
     ...(mend !== undefined && { mend }),
   });
 }

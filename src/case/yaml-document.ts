@@ -16,25 +16,16 @@ import {
   type YAMLError,
 } from 'yaml';
 import type { ReportProblem, Span } from '../diagnostics/problem.js';
-
-/** Part of a case file: a plain value with where it stands. */
-export type CaseNode =
-  | {
-      readonly kind: 'map';
-      readonly span: Span;
-      readonly entries: ReadonlyMap<string, { readonly keySpan: Span; readonly value: CaseNode }>;
-    }
-  | { readonly kind: 'list'; readonly span: Span; readonly items: readonly CaseNode[] }
-  | {
-      readonly kind: 'scalar';
-      readonly span: Span;
-      readonly value: string | number | boolean | null;
-      /** Offset of the first character of `value` in the file, where the text stands there letter for letter. */
-      readonly textStart: number | undefined;
-    };
+import type { CaseNode } from './case-node.js';
+import { describeSyntaxError } from './syntax-texts.js';
 
 const deepestNesting = 30;
 const mostNodes = 20_000;
+/** The parser's recursion bears far more; thirty levels are let in afterwards. */
+const deepestBrackets = 300;
+const compactNesting = /^[ \t]*(?:[-?:][ \t]+){30}/m;
+/** A line with a percent sign in front of the document: a directive could switch to an older YAML, where `no` is no word. */
+const directive = /^(?:[ \t]*(?:#[^\n]*)?\r?\n)*(?<directive>%[^\r\n]*)/;
 
 /** @returns the root of the file; undefined where it cannot be read, with at least one problem reported */
 export function readYamlDocument(text: string, report: ReportProblem): CaseNode | undefined {
@@ -49,13 +40,17 @@ export function readYamlDocument(text: string, report: ReportProblem): CaseNode 
     faulty = true;
     report({ code, severity: 'error', path: '', span, found, expected, ...(mend !== undefined && { mend }) });
   };
-  if (deepestBrackets(text) > deepestNesting) {
-    refuse(
-      'yaml_forbidden',
-      { start: 0, end: 1 },
-      `brackets nested deeper than ${deepestNesting}`,
-      'a plain case file',
-    );
+  const deep = findTooDeep(text);
+  if (deep !== undefined) {
+    const span = { start: deep, end: deep + 1 };
+    refuse('yaml_forbidden', span, 'collections nested far too deep', 'a plain case file');
+    return undefined;
+  }
+  const directed = directive.exec(text)?.groups?.['directive'];
+  if (directed !== undefined) {
+    const start = text.indexOf(directed);
+    const span = { start, end: start + directed.length };
+    refuse('yaml_forbidden', span, 'a YAML directive', 'a case without directives', 'remove the line');
     return undefined;
   }
   const documents = parseAllDocuments(text, {
@@ -198,7 +193,7 @@ function convert(node: ParsedNode | null, text: string, refuse: Refuse): CaseNod
       kind: 'scalar',
       span: keySpan,
       value: null,
-      textStart: undefined,
+      textStart: keySpan.start,
     };
     entries.set(word, { keySpan, value });
   }
@@ -226,67 +221,41 @@ function convertScalar(
     typeof value === 'boolean' ||
     value === null
   ) {
-    const quote = node.type === 'QUOTE_DOUBLE' || node.type === 'QUOTE_SINGLE' ? 1 : 0;
-    const start = span.start + quote;
-    const shown = typeof value === 'string' ? value : (node.source ?? '');
-    const isLiteral = text.startsWith(shown, start);
-    return { kind: 'scalar', span, value, textStart: isLiteral ? start : undefined };
+    return { kind: 'scalar', span, value, textStart: textStart(node.type, span.start, text) };
   }
   refuse('wrong_type', span, 'a value of a kind that cases do not have', 'a text or a number');
   return undefined;
 }
 
-/** Nesting of flow brackets, bounded before the parser recurses into them. */
-function deepestBrackets(text: string): number {
+/** Offset of the first character of a value's text: behind the quote, or below the line of `|` and `>`. */
+function textStart(type: string | undefined, start: number, text: string): number {
+  if (type === 'QUOTE_DOUBLE' || type === 'QUOTE_SINGLE') return start + 1;
+  if (type !== 'BLOCK_LITERAL' && type !== 'BLOCK_FOLDED') return start;
+  const lineBreak = text.indexOf('\n', start);
+  return lineBreak < 0 ? start : lineBreak + 1;
+}
+
+/**
+ * What would cost the parser its stack or minutes of time, found before it starts: nesting in flow brackets (counted roughly, texts and comments
+ * included, hence the wide margin), and `- - - -` or `? ? ? ?` in one line.
+ */
+function findTooDeep(text: string): number | undefined {
+  const run = compactNesting.exec(text);
+  if (run) return run.index;
   let depth = 0;
-  let deepest = 0;
   for (let i = 0; i < text.length; i++) {
     const code = text.charCodeAt(i);
-    if (code === 0x5b || code === 0x7b) deepest = Math.max(deepest, ++depth);
-    else if (code === 0x5d || code === 0x7d) depth = Math.max(0, depth - 1);
+    if (code === 0x5b || code === 0x7b) {
+      if (++depth > deepestBrackets) return i;
+    } else if (code === 0x5d || code === 0x7d) depth = Math.max(0, depth - 1);
   }
-  return deepest;
+  return undefined;
 }
 
 /** The parser's own words are for programmers; ours say what to do. */
-const syntaxTexts: Readonly<Record<string, readonly [found: string, expected: string, mend?: string]>> = {
-  TAB_AS_INDENT: ['a tab as indentation', 'spaces', 'replace the tab by two spaces'],
-  BAD_INDENT: ['an indentation that fits no level above', 'entries of one map in one column'],
-  BAD_ALIAS: [
-    'an alias without its anchor',
-    'every value written out',
-    'write the value; aliases are not used here',
-  ],
-  MISSING_CHAR: [
-    'a missing character: a bracket, quote or colon',
-    'brackets and quotes in pairs, `key: value`',
-  ],
-  MULTILINE_IMPLICIT_KEY: ['a key that runs over several lines', '`key: value` on one line'],
-  BLOCK_AS_IMPLICIT_KEY: [
-    'a second `: ` in one line',
-    'one key to a line',
-    'put texts that hold a colon in quotes',
-  ],
-  UNEXPECTED_TOKEN: [
-    'a character that does not belong here',
-    '`key: value`',
-    'put texts with special characters in quotes',
-  ],
-  TAG_RESOLVE_FAILED: ['a tag', 'values without tags', 'remove it'],
-  IMPOSSIBLE: ['text that cannot be read', '`key: value` lines'],
-  RESOURCE_EXHAUSTION: ['collections nested too deep', 'a plain case file'],
-};
-
 function reportSyntax(text: string, error: YAMLError, refuse: Refuse): void {
   const [start, end] = error.pos;
-  const known = syntaxTexts[error.code];
   const at = Math.min(start, Math.max(0, text.length - 1));
   const span = { start: at, end: Math.max(Math.min(end, text.length), at + 1) };
-  refuse(
-    'yaml_syntax',
-    span,
-    known?.[0] ?? 'text that YAML cannot read',
-    known?.[1] ?? '`key: value` lines',
-    known?.[2],
-  );
+  refuse('yaml_syntax', span, ...describeSyntaxError(error.code));
 }

@@ -1,27 +1,12 @@
 /** Problems as text for a terminal: place, what was found, what was expected, how to mend it, and the line with a caret. */
 import type { CaseError } from './case-error.js';
+import { createLineIndex, type LinePlace } from './line-index.js';
 import type { Problem } from './problem.js';
 
 /** At most this many problems are shown at once; the error object holds them all. */
 const mostShown = 50;
 /** Widest part of a source line that is shown. */
 const lineWidth = 100;
-
-export interface LinePlace {
-  /** From 1. */
-  readonly line: number;
-  /** From 1, in characters. */
-  readonly column: number;
-}
-
-/** Line and column of an offset. */
-export function placeOf(text: string, offset: number): LinePlace {
-  const before = text.slice(0, Math.max(0, Math.min(offset, text.length)));
-  const lastBreak = before.lastIndexOf('\n');
-  let line = 1;
-  for (let i = before.indexOf('\n'); i >= 0; i = before.indexOf('\n', i + 1)) line++;
-  return { line, column: before.length - lastBreak };
-}
 
 /** Text from a stranger made harmless for a terminal: control characters and direction marks become visible codes. */
 export function visibleText(text: string): string {
@@ -35,14 +20,19 @@ export function visibleText(text: string): string {
 const invisible = /[\p{Cc}\p{Cf}\p{Zl}\p{Zp}]/gu;
 
 /** In the order of the file; errors before warnings at one place. */
-export function sortProblems(problems: readonly Problem[]): readonly Problem[] {
+function sortProblems(problems: readonly Problem[]): readonly Problem[] {
   const rank = { error: 0, warning: 1 };
   return [...problems].sort((a, b) => a.span.start - b.span.start || rank[a.severity] - rank[b.severity]);
 }
 
 /** One problem as a block of lines, without a line break at the end. */
-export function formatProblem(problem: Problem, fileName: string, sourceText: string): string {
-  const place = placeOf(sourceText, problem.span.start);
+function formatProblem(
+  problem: Problem,
+  fileName: string,
+  sourceText: string,
+  placeOf: (offset: number) => LinePlace,
+): string {
+  const place = placeOf(problem.span.start);
   const kind = problem.severity === 'warning' ? 'warning: ' : '';
   const path = problem.path === '' ? '' : `  ${visibleText(problem.path)}`;
   // Of a file that could not be read there is no line to name.
@@ -59,7 +49,10 @@ export function formatProblem(problem: Problem, fileName: string, sourceText: st
 /** All problems of a case, and how many more there are. */
 export function formatProblems(problems: readonly Problem[], fileName: string, sourceText: string): string {
   const sorted = sortProblems(problems);
-  const blocks = sorted.slice(0, mostShown).map((problem) => formatProblem(problem, fileName, sourceText));
+  const placeOf = createLineIndex(sourceText);
+  const blocks = sorted
+    .slice(0, mostShown)
+    .map((problem) => formatProblem(problem, fileName, sourceText, placeOf));
   if (sorted.length > mostShown) blocks.push(`… and ${sorted.length - mostShown} more`);
   return blocks.join('\n\n');
 }
@@ -75,16 +68,18 @@ export interface ProblemReport extends LinePlace {
   readonly mend: string | null;
 }
 
+/** All problems for machines, in the order of the file; the text is needed for lines and columns. */
 export function reportProblems(
   problems: readonly Problem[],
   fileName: string,
   sourceText: string,
 ): readonly ProblemReport[] {
+  const placeOf = createLineIndex(sourceText);
   return sortProblems(problems).map((problem) => ({
     code: problem.code,
     severity: problem.severity,
     file: fileName,
-    ...placeOf(sourceText, problem.span.start),
+    ...placeOf(problem.span.start),
     path: problem.path,
     found: problem.found,
     expected: problem.expected,
@@ -92,6 +87,7 @@ export function reportProblems(
   }));
 }
 
+/** All problems of a case as text for a terminal, see {@link formatProblems}. */
 export function formatCaseError(error: CaseError): string {
   return formatProblems(error.problems, error.fileName, error.sourceText);
 }
@@ -101,8 +97,10 @@ function excerptOf(sourceText: string, problem: Problem, place: LinePlace): stri
   if (sourceText === '') return undefined;
   const lineStart = problem.span.start - (place.column - 1);
   const lineEnd = sourceText.indexOf('\n', lineStart);
-  const line = sourceText.slice(lineStart, lineEnd < 0 ? undefined : lineEnd).replace(/\r$/, '');
-  if (line.trim() === '') return undefined;
+  const written = sourceText.slice(lineStart, lineEnd < 0 ? undefined : lineEnd).replace(/\r$/, '');
+  if (written.trim() === '') return undefined;
+  // One sign for a tab: it may be the fault itself, and the caret below stays in its column.
+  const line = written.replaceAll('\t', '→');
   const from = line.length <= lineWidth ? 0 : Math.max(0, place.column - 1 - Math.floor(lineWidth / 2));
   const shown = line.slice(from, from + lineWidth);
   const ahead = visibleText(shown.slice(0, place.column - 1 - from));

@@ -4,7 +4,8 @@ import { describe, expect, it } from 'vitest';
 import { decodeCase } from '../../src/case/decode-case.js';
 import { readCase } from '../../src/case/read-case.js';
 import { CaseError } from '../../src/diagnostics/case-error.js';
-import { formatCaseError, placeOf } from '../../src/diagnostics/format-problem.js';
+import { formatCaseError } from '../../src/diagnostics/format-problem.js';
+import { createLineIndex } from '../../src/diagnostics/line-index.js';
 import type { Problem, ProblemCode } from '../../src/diagnostics/problem.js';
 
 const good = readFileSync(new URL('../../cases/salt-cooled-oxidation.yaml', import.meta.url), 'utf8');
@@ -30,7 +31,7 @@ function edited(
   const mark = replacement.indexOf('«');
   const plain = replacement.replace(/[«»]/g, '');
   const text = good.slice(0, at) + plain + good.slice(at + search.length);
-  return { text, place: placeOf(text, at + Math.max(mark, 0)) };
+  return { text, place: createLineIndex(text)(at + Math.max(mark, 0)) };
 }
 
 type EditRow = readonly [name: string, search: string, replacement: string, code: ProblemCode, path: string];
@@ -263,7 +264,7 @@ const edits: readonly EditRow[] = [
   [
     'unknown species in the feed',
     'A: 0.9 %,',
-    'A: 0.9 %, Ar: «1 %»,',
+    'A: 0.9 %, «Ar»: 1 %,',
     'unknown_name',
     'feed.mole_fractions.Ar',
   ],
@@ -344,7 +345,7 @@ describe('one fault in an otherwise good case', () => {
     const errors = problems.filter(({ severity }) => severity === 'error');
     const hit = errors.find((problem) => problem.code === code && problem.path === path);
     expect(errors.map((problem) => `${problem.code} ${problem.path}`)).toContain(`${code} ${path}`);
-    if (replacement.includes('«')) expect(placeOf(text, hit!.span.start)).toEqual(place);
+    if (replacement.includes('«')) expect(createLineIndex(text)(hit!.span.start)).toEqual(place);
     const shown = formatCaseError(error);
     expect(shown).toMatch(/^case\.yaml:\d+:\d+/);
     expect(shown).not.toMatch(/\n\s+at |\bError\b|undefined|NaN|\[object/);

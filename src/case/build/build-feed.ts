@@ -1,11 +1,12 @@
 import { gasConstant } from '../../quantities/constants.js';
-import type { SpeciesRecord } from '../../properties/species-record.js';
+import { listNames } from '../../diagnostics/list-names.js';
 import { didYouMean } from '../../diagnostics/nearest-name.js';
-import { formatPath, problemAt, type CaseContext, type CasePath } from '../case-context.js';
-import { reportUnknownKey } from '../read-section.js';
+import { formatPath, keyProblemAt, problemAt, type CaseContext, type CasePath } from '../case-context.js';
+import { reportUnknownKey, type SectionReading } from '../read-section.js';
 import type { BedInput } from '../schema/bed-schema.js';
 import type { FeedInput } from '../schema/feed-schema.js';
 import type { SpeciesSection } from './build-species.js';
+import { complete } from './holes.js';
 
 /** Fractions that are all given must sum to one this closely: one unit in the sixth place. */
 const sumTolerance = 1e-6;
@@ -29,45 +30,31 @@ export function checkSpeciesKeys(
   const strange = keys.filter((key) => !ids.includes(key));
   for (const key of strange) {
     const mend = didYouMean(key, ids);
-    problemAt(context, [...path, key], {
+    keyProblemAt(context, [...path, key], {
       code: 'unknown_name',
       found: `\`${key}\`, which is no species of this case`,
-      expected: `one of ${ids.join(', ')}`,
+      expected: `one of ${listNames(ids)}`,
       ...(mend !== undefined && { mend }),
     });
   }
   return strange.length === 0;
 }
 
-/** Molar flows of the whole reactor, mol/s, in case order. */
+/**
+ * Molar flows of the whole reactor, mol/s, in case order.
+ *
+ * @param bed - needed for a flux, a velocity or a space velocity; undefined where its section is at fault
+ * @returns undefined where anything they follow from is missing or at fault, with a problem reported
+ */
 export function buildMolarFlows(
   context: CaseContext,
-  input: FeedInput,
+  reading: SectionReading<FeedInput>,
   species: SpeciesSection,
   bed: BedInput | undefined,
 ): number[] | undefined {
-  const given = flowKeys.filter((key) => input[key] !== undefined);
-  if (input.molar_flows) {
-    if (given.length > 0 || input.mole_fractions || input.mass_fractions) {
-      problemAt(context, ['feed', 'molar_flows'], {
-        code: 'inconsistent',
-        found: `\`molar_flows\` beside \`${given[0] ?? (input.mole_fractions ? 'mole_fractions' : 'mass_fractions')}\``,
-        expected: '`molar_flows` alone: it says amount and composition',
-      });
-      return undefined;
-    }
-    const flows = input.molar_flows;
-    if (!checkSpeciesKeys(context, ['feed', 'molar_flows'], Object.keys(flows), species.ids))
-      return undefined;
-    const ordered = species.ids.map((id) => flows[id] ?? 0);
-    if (ordered.some((flow) => flow > 0)) return ordered;
-    problemAt(context, ['feed', 'molar_flows'], {
-      code: 'out_of_range',
-      found: 'no flow at all',
-      expected: 'a flow above zero',
-    });
-    return undefined;
-  }
+  if (reading.isGiven('molar_flows')) return readMolarFlows(context, reading, species);
+  const { values, isGiven } = reading;
+  const given = flowKeys.filter(isGiven);
   if (given.length !== 1) {
     problemAt(context, given.length === 0 ? ['feed'] : ['feed', given[1]!], {
       code: given.length === 0 ? 'missing_key' : 'inconsistent',
@@ -75,20 +62,47 @@ export function buildMolarFlows(
       expected: `exactly one of ${flowKeys.join(', ')} (or \`molar_flows\` of every species)`,
     });
   }
-  const fractions = readFractions(context, input, species);
-  if (given.length !== 1 || !fractions || !bed || species.records.some((record) => !record)) return undefined;
-  const records = species.records as readonly SpeciesRecord[];
+  const fractions = readFractions(context, reading, species);
+  const { temperature, pressure } = values;
+  const flow = given.length === 1 ? values[given[0]!] : undefined;
+  const records = complete(species.records);
+  if (flow === undefined || !fractions || !records || !bed) return undefined;
+  if (temperature === undefined || pressure === undefined) return undefined;
   const meanMass = fractions.reduce((sum, y, i) => sum + y * records[i]!.molarMass, 0);
-  const total = totalMolarFlow(given[0]!, input[given[0]!]!, input, bed, meanMass);
+  const total = totalMolarFlow(given[0]!, flow, { temperature, pressure, meanMass }, bed);
   return fractions.map((y) => y * total);
+}
+
+/** Each species' own flow, which says amount and composition at once. */
+function readMolarFlows(
+  context: CaseContext,
+  { values, isGiven }: SectionReading<FeedInput>,
+  species: SpeciesSection,
+): number[] | undefined {
+  const path = ['feed', 'molar_flows'];
+  const beside = [...flowKeys, 'mole_fractions' as const, 'mass_fractions' as const].filter(isGiven);
+  if (beside.length > 0) {
+    problemAt(context, path, {
+      code: 'inconsistent',
+      found: `\`molar_flows\` beside ${beside.map((key) => `\`${key}\``).join(', ')}`,
+      expected: '`molar_flows` alone: it says amount and composition',
+    });
+  }
+  const flows = values.molar_flows;
+  if (!flows || !checkSpeciesKeys(context, path, Object.keys(flows), species.ids) || beside.length > 0) {
+    return undefined;
+  }
+  const ordered = species.ids.map((id) => flows[id] ?? 0);
+  if (ordered.some((flow) => flow > 0)) return ordered;
+  problemAt(context, path, { code: 'out_of_range', found: 'no flow at all', expected: 'a flow above zero' });
+  return undefined;
 }
 
 function totalMolarFlow(
   key: (typeof flowKeys)[number],
   value: number,
-  feed: FeedInput,
+  feed: { readonly temperature: number; readonly pressure: number; readonly meanMass: number },
   bed: BedInput,
-  meanMass: number,
 ): number {
   const section = (Math.PI / 4) * bed.tube_diameter ** 2 * (bed.tubes ?? 1);
   const molarDensity = feed.pressure / (gasConstant * feed.temperature);
@@ -96,9 +110,9 @@ function totalMolarFlow(
     case 'molar_flow':
       return value;
     case 'mass_flow':
-      return value / meanMass;
+      return value / feed.meanMass;
     case 'mass_flux':
-      return (value * section) / meanMass;
+      return (value * section) / feed.meanMass;
     case 'velocity':
       return value * section * molarDensity;
     case 'volumetric_flow':
@@ -110,19 +124,21 @@ function totalMolarFlow(
 
 function readFractions(
   context: CaseContext,
-  input: FeedInput,
+  { values, isGiven }: SectionReading<FeedInput>,
   species: SpeciesSection,
 ): number[] | undefined {
-  const key = input.mole_fractions ? 'mole_fractions' : 'mass_fractions';
-  const given = input.mole_fractions ?? input.mass_fractions;
-  if (!given || (input.mole_fractions && input.mass_fractions)) {
-    problemAt(context, given ? ['feed', 'mass_fractions'] : ['feed'], {
-      code: given ? 'inconsistent' : 'missing_key',
-      found: given ? '`mole_fractions` and `mass_fractions`' : 'no composition in `feed`',
+  const keys = (['mole_fractions', 'mass_fractions'] as const).filter(isGiven);
+  if (keys.length !== 1) {
+    problemAt(context, keys.length > 0 ? ['feed', 'mass_fractions'] : ['feed'], {
+      code: keys.length > 0 ? 'inconsistent' : 'missing_key',
+      found: keys.length > 0 ? '`mole_fractions` and `mass_fractions`' : 'no composition in `feed`',
       expected: 'one of `mole_fractions` and `mass_fractions`',
     });
     return undefined;
   }
+  const key = keys[0]!;
+  const given = values[key];
+  if (!given) return undefined;
   const path = ['feed', key];
   if (!checkSpeciesKeys(context, path, Object.keys(given), species.ids)) return undefined;
   const balances = Object.entries(given).filter(([, value]) => value === 'balance');
@@ -148,19 +164,19 @@ function readFractions(
     });
     return undefined;
   }
-  const values = species.ids.map((id) => {
+  const shares = species.ids.map((id) => {
     const value = given[id];
     return value === 'balance' ? Math.max(0, 1 - sum) : (value ?? 0);
   });
-  const shares = key === 'mole_fractions' ? values : toAmounts(values, species);
-  const total = shares?.reduce((all, share) => all + share, 0);
-  return shares?.map((share) => share / total!);
+  const amounts = key === 'mole_fractions' ? shares : toAmounts(shares, species);
+  const total = amounts?.reduce((all, amount) => all + amount, 0);
+  return amounts?.map((amount) => amount / total!);
 }
 
 /** Mass fractions over molar masses; undefined where a record is missing. */
-function toAmounts(values: readonly number[], species: SpeciesSection): number[] | undefined {
-  if (species.records.some((record) => !record)) return undefined;
-  return values.map((value, i) => value / species.records[i]!.molarMass);
+function toAmounts(massFractions: readonly number[], species: SpeciesSection): number[] | undefined {
+  const records = complete(species.records);
+  return records && massFractions.map((fraction, i) => fraction / records[i]!.molarMass);
 }
 
 /** A value for each species, from one value or a map; `undefined` entries where a map is silent. */
@@ -180,16 +196,19 @@ export function perReaction(
   context: CaseContext,
   path: CasePath,
   input: number | Record<string, number>,
-  names: readonly string[],
+  names: readonly (string | undefined)[],
 ): number[] | undefined {
   if (typeof input === 'number') return names.map(() => input);
+  const known = complete(names);
+  // A reaction whose name could not be read may be the one that is meant.
+  if (!known) return undefined;
   let isSound = true;
   for (const key of Object.keys(input)) {
-    if (names.includes(key)) continue;
+    if (known.includes(key)) continue;
     isSound = false;
-    reportUnknownKey(context, path, key, names);
+    reportUnknownKey(context, path, key, known);
   }
-  for (const name of names) {
+  for (const name of known) {
     if (input[name] !== undefined) continue;
     isSound = false;
     problemAt(context, path, {
@@ -198,5 +217,5 @@ export function perReaction(
       expected: 'a value for every reaction',
     });
   }
-  return isSound ? names.map((name) => input[name]!) : undefined;
+  return isSound ? known.map((name) => input[name]!) : undefined;
 }

@@ -2,29 +2,38 @@ import type { Assumption } from '../../bed/reactor-specification.js';
 import type { PelletGeometry, PelletMethod, PelletSpecification } from '../../pellet/pellet-specification.js';
 import { longCylinderGeometry, slabGeometry, sphereGeometry } from '../../pellet/shapes.js';
 import { problemAt, type CaseContext } from '../case-context.js';
+import type { SectionReading } from '../read-section.js';
 import type { HeatInput } from '../schema/bed-schema.js';
 import type { PelletInput } from '../schema/pellet-schema.js';
 import { perReaction, perSpecies } from './build-feed.js';
 
-/** What a pellet's data are needed for. */
+/** What a pellet's data are needed for, as far as the case's other sections could be read. */
 interface PelletNeeds {
   readonly speciesIds: readonly string[];
-  readonly reactionNames: readonly string[];
+  readonly reactionNames: readonly (string | undefined)[];
   /** True for species that take part in a reaction. */
   readonly isActive: readonly boolean[];
-  readonly heat: HeatInput | undefined;
-  /** A rate law per catalyst mass, or any report of catalyst mass, needs the density. */
+  /** Undefined where the section `heat` is at fault: then nothing is asked for that hangs on it. */
+  readonly heatMode: HeatInput['mode'] | undefined;
   readonly assumptions: Assumption[];
 }
 
+/** Reports that something is missing and why it is needed. */
+type Missing = (key: keyof PelletInput, why: string, example: string) => void;
+
+/**
+ * The pellet, with what the case needs of it asked for.
+ *
+ * @returns undefined where anything is missing or at fault, with a problem reported
+ */
 export function buildPellet(
   context: CaseContext,
-  input: PelletInput,
+  reading: SectionReading<PelletInput>,
   needs: PelletNeeds,
 ): PelletSpecification | undefined {
-  let isSound = true;
-  const missing = (key: string, why: string, example: string): void => {
-    isSound = false;
+  const { values, isGiven } = reading;
+  const missing: Missing = (key, why, example) => {
+    if (isGiven(key)) return;
     problemAt(context, ['pellet'], {
       code: 'missing_property',
       found: `no \`${key}\` in \`pellet\``,
@@ -32,49 +41,49 @@ export function buildPellet(
       mend: `add \`${key}: ${example}\``,
     });
   };
-  const geometry = input.shape && toGeometry(input.shape);
-  if (!geometry)
-    missing('shape', 'rates, friction and diffusion need the pellet’s size', '{sphere: {diameter: 4 mm}}');
-  if (input.density === undefined) missing('density', 'catalyst mass follows from it', '1800 kg/m^3');
-  const method = toMethod(context, input, needs);
-  if (!method) isSound = false;
+  missing('shape', 'rates, friction and diffusion need the pellet’s size', '{sphere: {diameter: 4 mm}}');
+  missing('density', 'catalyst mass follows from it', '1800 kg/m^3');
+  const method = isGiven('method') ? toMethod(context, values.method, needs) : defaultMethod(needs);
   const isResolved = method?.kind === 'full' || method?.kind === 'thiele';
-  const isIsothermal = needs.heat?.mode === 'isothermal';
-
-  const diffusivities = resolveDiffusivities(context, input, needs, isResolved, missing);
-  const film = resolveFilm(context, input, needs, isResolved, isIsothermal, missing);
-  const needsConductivity = method?.kind === 'full' && !isIsothermal;
-  if (needsConductivity && input.thermal_conductivity === undefined) {
-    missing(
-      'thermal_conductivity',
-      'temperature varies inside the pellet of a bed that is not isothermal',
-      '0.35 W/(m K)',
-    );
+  const isIsothermal = needs.heatMode === 'isothermal';
+  const needsConductivity = method?.kind === 'full' && needs.heatMode !== undefined && !isIsothermal;
+  if (needsConductivity) {
+    const why = 'temperature varies inside the pellet of a bed that is not isothermal';
+    missing('thermal_conductivity', why, '0.35 W/(m K)');
   }
-  if (isResolved && isIsothermal) {
+  const diffusivities = resolveDiffusivities(context, values, needs, isResolved, missing);
+  const film = resolveFilm(context, values, needs, isResolved, missing);
+  noteAssumptions(needs, isResolved && isIsothermal, !isGiven('activity'));
+  const { shape, density, thermal_conductivity } = values;
+  if (!reading.isSound || !method || !diffusivities || !film) return undefined;
+  if (!shape || density === undefined) return undefined;
+  if (needsConductivity && thermal_conductivity === undefined) return undefined;
+  return {
+    geometry: toGeometry(shape),
+    method,
+    density,
+    activity: values.activity ?? 1,
+    effectiveDiffusivities: diffusivities,
+    thermalConductivity: needsConductivity ? (thermal_conductivity as number) : Infinity,
+    film,
+  };
+}
+
+function noteAssumptions(needs: PelletNeeds, isIsothermalInside: boolean, isFresh: boolean): void {
+  if (isIsothermalInside) {
     needs.assumptions.push({
       about: 'pellet',
       statement: 'film and pellet are at the bed’s temperature, since the bed is isothermal',
       source: 'case: heat.mode',
     });
   }
-  if (input.activity === undefined) {
+  if (isFresh) {
     needs.assumptions.push({
       about: 'pellet.activity',
       statement: 'activity 1: fresh catalyst',
       source: 'default',
     });
   }
-  if (!isSound || !geometry || !method || !diffusivities || !film) return undefined;
-  return {
-    geometry,
-    method,
-    density: input.density!,
-    activity: input.activity ?? 1,
-    effectiveDiffusivities: diffusivities,
-    thermalConductivity: needsConductivity ? (input.thermal_conductivity as number) : Infinity,
-    film,
-  };
 }
 
 function toGeometry(shape: NonNullable<PelletInput['shape']>): PelletGeometry {
@@ -83,16 +92,21 @@ function toGeometry(shape: NonNullable<PelletInput['shape']>): PelletGeometry {
   return longCylinderGeometry(shape.cylinder!.diameter);
 }
 
-function toMethod(context: CaseContext, input: PelletInput, needs: PelletNeeds): PelletMethod | undefined {
-  const { method } = input;
-  if (method === undefined) {
-    needs.assumptions.push({
-      about: 'pellet.method',
-      statement: 'the reaction–diffusion problem is solved in the pellet at every position (`full`)',
-      source: 'default',
-    });
-    return { kind: 'full' };
-  }
+function defaultMethod(needs: PelletNeeds): PelletMethod {
+  needs.assumptions.push({
+    about: 'pellet.method',
+    statement: 'the reaction–diffusion problem is solved in the pellet at every position (`full`)',
+    source: 'default',
+  });
+  return { kind: 'full' };
+}
+
+function toMethod(
+  context: CaseContext,
+  method: PelletInput['method'],
+  needs: PelletNeeds,
+): PelletMethod | undefined {
+  if (method === undefined) return undefined;
   if (typeof method === 'string') return { kind: method };
   const effectiveness = perReaction(
     context,
@@ -103,11 +117,9 @@ function toMethod(context: CaseContext, input: PelletInput, needs: PelletNeeds):
   return effectiveness && { kind: 'fixed', effectiveness };
 }
 
-type Missing = (key: string, why: string, example: string) => void;
-
 function resolveDiffusivities(
   context: CaseContext,
-  input: PelletInput,
+  input: SectionReading<PelletInput>['values'],
   needs: PelletNeeds,
   isNeeded: boolean,
   missing: Missing,
@@ -138,10 +150,9 @@ function resolveDiffusivities(
 
 function resolveFilm(
   context: CaseContext,
-  input: PelletInput,
+  input: SectionReading<PelletInput>['values'],
   needs: PelletNeeds,
   isNeeded: boolean,
-  isIsothermal: boolean,
   missing: Missing,
 ): PelletSpecification['film'] | undefined {
   const none = { massTransfer: needs.speciesIds.map(() => Infinity), heatTransfer: Infinity };
@@ -164,7 +175,9 @@ function resolveFilm(
   }
   const { mass_transfer, heat_transfer } = input.film;
   const path = ['pellet', 'film'];
-  if (mass_transfer === undefined || (heat_transfer === undefined && !isIsothermal)) {
+  // Where the mode of the bed could not be read, the heat transfer coefficient is not asked for.
+  const isHeatNeeded = needs.heatMode !== undefined && needs.heatMode !== 'isothermal';
+  if (mass_transfer === undefined || (heat_transfer === undefined && isHeatNeeded)) {
     const key = mass_transfer === undefined ? 'mass_transfer' : 'heat_transfer';
     problemAt(context, path, {
       code: 'missing_property',
@@ -184,7 +197,7 @@ function resolveFilm(
       'film coefficient',
       'it takes part in a reaction',
     );
-  return massTransfer && { massTransfer, heatTransfer: isIsothermal ? Infinity : heat_transfer! };
+  return massTransfer && { massTransfer, heatTransfer: isHeatNeeded ? heat_transfer! : Infinity };
 }
 
 /** Every species that reacts must have a value; the others need none. */

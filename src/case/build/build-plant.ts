@@ -11,25 +11,37 @@ import type {
 } from '../../bed/reactor-specification.js';
 import type { ReactionRecord } from '../../kinetics/reaction-record.js';
 import type * as z from 'zod';
+import { didYouMean } from '../../diagnostics/nearest-name.js';
+import { listNames } from '../../diagnostics/list-names.js';
 import { problemAt, type CaseContext } from '../case-context.js';
+import type { SectionReading } from '../read-section.js';
 import type { BedInput, HeatInput, outputSchema, targetsSchema } from '../schema/bed-schema.js';
 import type { FluidInput } from '../schema/feed-schema.js';
 import type { PropertyValue } from '../schema/leaves.js';
+import { findBestYield } from './best-yield.js';
 import { checkSpeciesKeys } from './build-feed.js';
+import { complete } from './holes.js';
 
+/**
+ * The fluid; its viscosity is asked for where there is friction.
+ *
+ * @param reading - undefined where the case has no such section
+ * @param bed - undefined where its section is at fault
+ */
 export function buildFluid(
   context: CaseContext,
-  input: FluidInput,
+  reading: SectionReading<FluidInput> | undefined,
   bed: BedInput | undefined,
   assumptions: Assumption[],
 ): ReactorSpecification['fluid'] | undefined {
+  const values = reading?.values ?? {};
   assumptions.push({
     about: 'fluid.equation_of_state',
     statement: 'the gas is ideal',
-    source: input.equation_of_state === undefined ? 'default' : 'case: fluid.equation_of_state',
+    source: values.equation_of_state === undefined ? 'default' : 'case: fluid.equation_of_state',
   });
   const needsViscosity = bed !== undefined && bed.pressure_drop !== 'none';
-  if (needsViscosity && input.viscosity === undefined) {
+  if (needsViscosity && !(reading?.isGiven('viscosity') ?? false)) {
     problemAt(context, ['fluid'], {
       code: 'missing_property',
       found: 'no `viscosity` in `fluid`',
@@ -38,11 +50,12 @@ export function buildFluid(
     });
     return undefined;
   }
-  const { viscosity } = input;
+  if (reading && !reading.isSound) return undefined;
+  const { viscosity } = values;
   return {
     phase: 'gas',
     equationOfState: 'ideal',
-    heatCapacity: toHeatCapacity(input.heat_capacity, assumptions),
+    heatCapacity: toHeatCapacity(values.heat_capacity, assumptions),
     ...(viscosity !== undefined && viscosity !== 'estimate' && { viscosity: toProperty(viscosity) }),
   };
 }
@@ -69,6 +82,7 @@ function toProperty(input: PropertyValue): FluidProperty {
     : { kind: 'formula', formula: input.formula };
 }
 
+/** The bed; its schema has checked all of it. */
 export function buildBed(input: BedInput, assumptions: Assumption[]): ReactorSpecification['bed'] {
   if (input.tubes === undefined)
     assumptions.push({ about: 'bed.tubes', statement: 'one tube', source: 'default' });
@@ -95,99 +109,54 @@ function toPressureDrop(input: BedInput['pressure_drop']): PressureDropSpecifica
   return { kind: 'two_term', ...input, source: 'case: bed.pressure_drop' };
 }
 
-export function buildHeat(context: CaseContext, input: HeatInput): HeatSpecification | undefined {
-  if (input.mode !== 'cooled') {
+/** How heat leaves the bed; what a mode needs is asked for, and what it has no use for is refused. */
+export function buildHeat(
+  context: CaseContext,
+  { values, isGiven, isSound }: SectionReading<HeatInput>,
+): HeatSpecification | undefined {
+  const { mode, overall_coefficient, coolant } = values;
+  if (mode === undefined) return undefined;
+  if (mode !== 'cooled') {
     for (const key of ['overall_coefficient', 'coolant'] as const) {
-      if (input[key] === undefined) continue;
+      if (!isGiven(key)) continue;
       problemAt(context, ['heat', key], {
         code: 'inconsistent',
-        found: `\`${key}\` in a bed that is ${input.mode}`,
+        found: `\`${key}\` in a bed that is ${mode}`,
         expected: '`mode: cooled`, or no such key',
       });
     }
-    return { mode: input.mode };
+    return isSound ? { mode } : undefined;
   }
-  let isSound = true as boolean;
-  const require = (isGiven: boolean, key: string, example: string): void => {
-    if (isGiven) return;
-    isSound = false;
+  const examples = {
+    overall_coefficient: 'overall_coefficient: 110 W/(m^2 K)',
+    coolant: 'coolant: {temperature: 640 K}',
+  } as const;
+  for (const key of ['overall_coefficient', 'coolant'] as const) {
+    if (isGiven(key)) continue;
     problemAt(context, ['heat'], {
       code: 'missing_key',
       found: `no \`${key}\` in \`heat\``,
       expected: 'it, since the bed is cooled',
-      mend: `add \`${example}\``,
+      mend: `add \`${examples[key]}\``,
     });
-  };
-  require(input.overall_coefficient !==
-    undefined, 'overall_coefficient', 'overall_coefficient: 110 W/(m^2 K)');
-  require(input.coolant !== undefined, 'coolant', 'coolant: {temperature: 640 K}');
-  if (!isSound) return undefined;
+  }
+  if (!isSound || overall_coefficient === undefined || !coolant) return undefined;
   return {
-    mode: 'cooled',
-    overallCoefficient: input.overall_coefficient!,
-    coolantTemperature: input.coolant!.temperature,
+    mode,
+    overallCoefficient: overall_coefficient,
+    coolantTemperature: coolant.temperature,
   };
 }
 
-/** The heat balance asks for data only where temperature can change. */
-export function checkHeatData(
-  context: CaseContext,
-  specification: Pick<ReactorSpecification, 'species' | 'reactions' | 'fluid' | 'feed'>,
-): boolean {
-  const { species, reactions, fluid, feed } = specification;
-  let isSound = true as boolean;
-  const missing = (index: number, property: string, why: string): void => {
-    isSound = false;
-    const { id, source } = species[index]!;
-    const isOwn = source === 'own record in the case';
-    problemAt(context, ['species', id], {
-      code: 'missing_property',
-      found: `no \`${property}\` of ${id}${isOwn ? '' : ' in the species library'}`,
-      expected: `it, since ${why}`,
-      mend:
-        property === 'heat_of_formation'
-          ? 'add it, or give the reaction its `heat`'
-          : 'add it, or give `heat_capacity` under `fluid`',
-    });
-  };
-  const reported = new Set<string>();
-  const once = (index: number, property: string, why: string): void => {
-    const key = `${index} ${property}`;
-    if (reported.has(key)) return;
-    reported.add(key);
-    missing(index, property, why);
-  };
-  for (const reaction of reactions) {
-    if (reaction.heat) continue;
-    reaction.stoichiometry.forEach((coefficient, i) => {
-      if (coefficient === 0) return;
-      const why = `reaction \`${reaction.name}\` has no \`heat\` and the bed is not isothermal`;
-      if (species[i]!.enthalpyOfFormation === undefined && species[i]!.heatCapacity?.kind !== 'nasa') {
-        once(i, 'heat_of_formation', why);
-      }
-      if (!species[i]!.heatCapacity) once(i, 'heat_capacity', why);
-    });
-  }
-  if (fluid.heatCapacity.kind === 'species') {
-    species.forEach((record, i) => {
-      const isPresent =
-        feed.molarFlows[i]! > 0 || reactions.some(({ stoichiometry }) => stoichiometry[i] !== 0);
-      if (isPresent && !record.heatCapacity) {
-        once(i, 'heat_capacity', 'the heat capacity of the mixture is taken from the species');
-      }
-    });
-  }
-  return isSound;
-}
-
+/** Conversions whose first position is reported. */
 export function buildTargets(
   context: CaseContext,
   input: z.output<typeof targetsSchema>,
   ids: readonly string[],
   molarFlows: readonly number[] | undefined,
-): ConversionTarget[] | undefined {
+): ConversionTarget[] {
   const wanted = input.conversion ?? {};
-  if (!checkSpeciesKeys(context, ['targets', 'conversion'], Object.keys(wanted), ids)) return undefined;
+  if (!checkSpeciesKeys(context, ['targets', 'conversion'], Object.keys(wanted), ids)) return [];
   return Object.entries(wanted).map(([id, conversion]) => {
     const speciesIndex = ids.indexOf(id);
     if (molarFlows && !(molarFlows[speciesIndex]! > 0)) {
@@ -201,11 +170,12 @@ export function buildTargets(
   });
 }
 
+/** What is to be written besides the usual; where species, reactions or bed are at fault, nothing is held against them. */
 export function buildOutput(
   context: CaseContext,
   input: z.output<typeof outputSchema>,
-  ids: readonly string[],
-  reactions: readonly ReactionRecord[],
+  ids: readonly string[] | undefined,
+  reactions: readonly (ReactionRecord | undefined)[] | undefined,
   bedLength: number | undefined,
 ): ReactorSpecification['output'] {
   const pelletPositions = (input.pellet_positions ?? []).filter((position, index) => {
@@ -218,29 +188,30 @@ export function buildOutput(
     return false;
   });
   const selectivities = (input.selectivity ?? []).flatMap((request, index): SelectivityRequest[] => {
+    if (!ids) return [];
     const [productIndex, reactantIndex] = [ids.indexOf(request.of), ids.indexOf(request.from)];
     const path = ['output', 'selectivity', index];
-    if (productIndex < 0 || reactantIndex < 0) {
-      const key = productIndex < 0 ? 'of' : 'from';
+    for (const key of ['of', 'from'] as const) {
+      if (ids.includes(request[key])) continue;
+      const mend = didYouMean(request[key], ids);
       problemAt(context, [...path, key], {
         code: 'unknown_name',
         found: `\`${request[key]}\`, which is no species of this case`,
-        expected: `one of ${ids.join(', ')}`,
+        expected: `one of ${listNames(ids)}`,
+        ...(mend !== undefined && { mend }),
       });
-      return [];
     }
-    const making = reactions.find(
-      ({ stoichiometry }) => stoichiometry[productIndex]! > 0 && stoichiometry[reactantIndex]! < 0,
-    );
-    if (!making) {
+    const known = reactions && complete(reactions);
+    if (!known || productIndex < 0 || reactantIndex < 0) return [];
+    const productPerReactant = findBestYield(known, productIndex, reactantIndex);
+    if (productPerReactant === undefined) {
       problemAt(context, path, {
         code: 'inconsistent',
-        found: `no reaction that makes ${request.of} from ${request.from}`,
-        expected: 'a product and a reactant of one reaction',
+        found: `no reaction, nor a chain of them, that makes ${request.of} from ${request.from}`,
+        expected: 'a product and the reactant it comes from',
       });
       return [];
     }
-    const productPerReactant = making.stoichiometry[productIndex]! / -making.stoichiometry[reactantIndex]!;
     return [{ productIndex, reactantIndex, productPerReactant }];
   });
   return { points: input.points ?? 101, pelletPositions, selectivities };

@@ -7,10 +7,14 @@ import { didYouMean } from '../../diagnostics/nearest-name.js';
 import type { Fault } from '../../diagnostics/problem.js';
 import type { CheckedFormula } from '../../expressions/expression.js';
 import { parseFormula } from '../../expressions/parse-formula.js';
-import { sameDimension } from '../../quantities/dimension.js';
+import {
+  formatDimension,
+  isDimensionless,
+  sameDimension,
+  type Dimension,
+} from '../../quantities/dimension.js';
 import { missingUnit, nouns, parseAnyQuantity, parseQuantity } from '../../quantities/parse-quantity.js';
 import { quantityKinds, type QuantityKind, type QuantityKindName } from '../../quantities/quantity-kinds.js';
-import type { Dimension } from '../../quantities/dimension.js';
 
 /** A fault whose span may be left out: then it points at the whole value. */
 export type LooseFault = Omit<Fault, 'span' | 'severity'> & Partial<Pick<Fault, 'span' | 'severity'>>;
@@ -51,19 +55,32 @@ const boundTests: readonly (readonly [keyof Bounds, (value: number, bound: numbe
   ['below', (value, bound) => value < bound, 'below'],
 ];
 
-function checkBounds(value: number, found: string, bounds: Bounds, context: Context): boolean {
+/** @param kind - of the value; undefined for a plain number */
+function checkBounds(
+  value: number,
+  found: string,
+  bounds: Bounds,
+  context: Context,
+  kind?: QuantityKind,
+): boolean {
   for (const [key, test, words] of boundTests) {
     const bound = bounds[key];
     if (bound !== undefined && !test(value, bound)) {
       addFault(context, {
         code: 'out_of_range',
         found: `\`${found}\``,
-        expected: `a value ${words} ${bound} (in SI units)`,
+        expected: `${kind?.noun ?? 'a number'} ${words} ${bound}${unitOfBound(bound, kind)}`,
       });
       return false;
     }
   }
   return true;
+}
+
+/** Zero needs no unit, and a number has none. */
+function unitOfBound(bound: number, kind: QuantityKind | undefined): string {
+  if (bound === 0 || kind === undefined || isDimensionless(kind.dimension)) return '';
+  return ` ${formatDimension(kind.dimension)}`;
 }
 
 const kindsOf = (names: QuantityKindName | readonly QuantityKindName[]): readonly QuantityKind[] =>
@@ -103,7 +120,7 @@ export function quantity(
     .unknown()
     .transform((value, context): number => {
       const read = readQuantity(value, kinds, context);
-      if (!read || !checkBounds(read.value, String(value), bounds, context)) return z.NEVER;
+      if (!read || !checkBounds(read.value, String(value), bounds, context, read.kind)) return z.NEVER;
       return read.value;
     })
     .meta({ description, quantity: kinds.map(({ id }) => id), examples: [kinds[0]!.example] });
@@ -122,16 +139,22 @@ export function temperature(description: string): z.ZodType<number> {
   return quantity('temperature', description, { above: 50, below: 5000 });
 }
 
-/** A constant or a formula in T and P. */
+/** A constant or a formula in T and P; `of` is the id of the kind of quantity that it turned out to be. */
 export type PropertyValue =
   | { readonly kind: 'constant'; readonly value: number; readonly of: string }
   | { readonly kind: 'formula'; readonly formula: CheckedFormula; readonly of: string };
 
 const mentionsState = /(?<![\w.])[TP](?![\w])/;
 
+/**
+ * A positive property of the fluid or of a species.
+ *
+ * @param allowsPressure - whether a formula may name P; an ideal gas's heat capacity does not depend on it
+ */
 export function property(
   names: QuantityKindName | readonly QuantityKindName[],
   description: string,
+  allowsPressure = true,
 ): z.ZodType<PropertyValue> {
   const kinds = kindsOf(names);
   return z
@@ -140,8 +163,8 @@ export function property(
       if (typeof value === 'string' && mentionsState.test(value)) {
         const formula = parseFormula(
           value,
-          { constants: new Map(), speciesIds: [], allowsTemperature: true, allowsPressure: true },
-          (fault) => addFault(context, fault),
+          { constants: new Map(), speciesIds: [], allowsTemperature: true, allowsPressure },
+          (fault) => addFault(context, allowsPressure ? fault : withoutPressure(value, fault)),
         );
         if (!formula) return z.NEVER;
         const kind = kinds.find(({ dimension }) => sameDimension(dimension, formula.dimension));
@@ -155,7 +178,7 @@ export function property(
         return z.NEVER;
       }
       const read = readQuantity(value, kinds, context);
-      if (!read || !checkBounds(read.value, String(value), { above: 0 }, context)) return z.NEVER;
+      if (!read || !checkBounds(read.value, String(value), { above: 0 }, context, read.kind)) return z.NEVER;
       return { kind: 'constant', value: read.value, of: read.kind.id };
     })
     .meta({
@@ -164,6 +187,13 @@ export function property(
       acceptsFormula: true,
       examples: [kinds[0]!.example],
     });
+}
+
+/** Where P has no place it would be read as the unit poise, which is not what anyone means. */
+function withoutPressure(text: string, fault: Fault): Fault {
+  if (text.slice(fault.span.start, fault.span.end) !== 'P') return fault;
+  const { code, severity, span } = fault;
+  return { code, severity, span, found: 'the pressure `P`', expected: 'a formula in `T` alone' };
 }
 
 /** A number with any unit or none: a rate constant. */

@@ -43,7 +43,7 @@ const nasaRange = z
 export type NasaInput = readonly { from: number; to: number; coefficients: number[] }[];
 export type HeatCapacityInput = PropertyValue | { readonly kind: 'nasa'; readonly ranges: NasaInput };
 
-const heatCapacityValue = property('heatCapacityPerAmount', 'molar heat capacity, ideal gas');
+const heatCapacityValue = property('heatCapacityPerAmount', 'molar heat capacity, ideal gas', false);
 const heatCapacityNasa = z.strictObject({ nasa: z.array(nasaRange).min(1) });
 
 const heatCapacity: z.ZodType<HeatCapacityInput> = z
@@ -58,7 +58,8 @@ const heatCapacity: z.ZodType<HeatCapacityInput> = z
     quantity: ['heat_capacity_per_amount'],
   });
 
-const record = z.strictObject({
+/** An own record. */
+export const speciesRecordSchema = z.strictObject({
   name: text('trade name', 200).optional(),
   molar_mass: positive('molarMass', 'molar mass; from the formula where absent').optional(),
   formula: text('chemical formula, for the element balance', 60).optional(),
@@ -74,19 +75,3 @@ const record = z.strictObject({
   viscosity: later('`viscosity` of a species'),
   thermal_conductivity: later('`thermal_conductivity` of a species'),
 });
-
-export type SpeciesInput = 'library' | z.output<typeof record>;
-
-export const speciesSchema: z.ZodType<SpeciesInput> = z
-  .unknown()
-  .transform((value, context): SpeciesInput => {
-    if (value === 'library') return 'library';
-    if (isMap(value)) return delegate(record, value, context);
-    addFault(context, {
-      code: 'wrong_value',
-      found: describeValue(value),
-      expected: '`library`, or a record such as `{formula: C8H10, molar_mass: 106.17 g/mol}`',
-    });
-    return z.NEVER;
-  })
-  .meta({ description: 'a species: `library`, or an own record' });
