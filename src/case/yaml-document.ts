@@ -107,6 +107,17 @@ type Refuse = (
   mend?: string,
 ) => void;
 
+const mergeKey = ['a merge key `<<`', 'every key written out', 'copy the keys here'] as const;
+
+/** At least one character wide, so that there is something to point at. */
+function spanOf({ range }: { readonly range?: readonly [number, number, number] | null }): Span {
+  const [start, end] = range ?? [0, 0];
+  return { start, end: Math.max(end, start + 1) };
+}
+
+const levelsAbove = (path: readonly unknown[]): number =>
+  path.filter((above) => isMap(above) || isSeq(above)).length;
+
 /** False where anything was refused. */
 function refuseForbidden(document: Document.Parsed, report: Refuse): boolean {
   let isAllowed = true as boolean;
@@ -116,11 +127,16 @@ function refuseForbidden(document: Document.Parsed, report: Refuse): boolean {
   };
   let nodes = 0;
   visit(document, (_key, node, path) => {
-    if (isPair(node)) return undefined;
+    if (isPair(node)) {
+      // What a merge key would have brought is missing: nothing more can be said of the case.
+      if (isScalar(node.key) && node.key.value === '<<')
+        refuse('yaml_forbidden', spanOf(node.key), ...mergeKey);
+      return undefined;
+    }
     const range = (node as ParsedNode | null)?.range;
     if (!range) return undefined;
     const span = { start: range[0], end: Math.max(range[1], range[0] + 1) };
-    if (++nodes > mostNodes || path.length > 2 * deepestNesting) {
+    if (++nodes > mostNodes || levelsAbove(path) > deepestNesting) {
       refuse(
         'yaml_forbidden',
         span,
@@ -174,10 +190,6 @@ function convert(node: ParsedNode | null, text: string, refuse: Refuse): CaseNod
       refuse('wrong_type', keySpan, 'a key that is no word', 'a word');
       continue;
     }
-    if (name === '<<') {
-      refuse('yaml_forbidden', keySpan, 'a merge key `<<`', 'every key written out', 'copy the keys here');
-      continue;
-    }
     // `no` and `NO` are words in YAML 1.2, but `true` is not: as a key it can only be meant as a word.
     const word = String(name);
     if (entries.has(word)) {
@@ -212,8 +224,8 @@ function convertScalar(
   refuse: Refuse,
 ): CaseNode | undefined {
   if (typeof value === 'number' && !Number.isFinite(value)) {
-    refuse('out_of_range', span, `\`${node.source ?? String(value)}\``, 'a finite number');
-    return undefined;
+    // `.inf`, `.nan` and `1e999` stay what was written: no key takes them, and each says what it takes instead.
+    return { kind: 'scalar', span, value: node.source ?? String(value), textStart: span.start };
   }
   if (
     typeof value === 'string' ||

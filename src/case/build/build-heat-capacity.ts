@@ -5,7 +5,7 @@ import { createSpeciesThermochemistry, referenceTemperature } from '../../proper
 import { problemAt, type CaseContext, type CasePath } from '../case-context.js';
 import type { HeatCapacityInput, NasaInput } from '../schema/species-schema.js';
 
-/** Published polynomials meet at their break to better than 0.1 %; a hundredth betrays ranges that were mixed up. */
+/** Published polynomials meet at their break to better than 0.1 %; a hundredth betrays a coefficient that was mistyped. */
 const alarmingJump = 0.01;
 /** J/mol and J/(mol K): tabulated values from different sources differ by about this much. */
 const alarmingEnthalpy = 1000;
@@ -92,7 +92,7 @@ function warnOfJumps(
       severity: 'warning',
       found: `a heat capacity that jumps by ${(100 * jump).toPrecision(2)} % at ${range.highest} K`,
       expected: 'polynomials that meet where their ranges do',
-      mend: 'check that the coefficients stand with their own range, lower temperatures first',
+      mend: 'check the coefficients of both ranges',
     });
   }
 }

@@ -147,7 +147,8 @@ function readRate(
     // A constant at fault is reported where it stands: a law that names it would only repeat that.
     if (!missing.has(text.slice(fault.span.start, fault.span.end))) report(fault);
   });
-  if (!rate || (isGiven('per') && values.per === undefined)) return undefined;
+  // With a hole in what the law is made of, its dimension says nothing.
+  if (!rate || missing.size > 0 || (isGiven('per') && values.per === undefined)) return undefined;
   const basis = values.per ?? 'catalyst_mass';
   const wanted = rateDimensions[basis];
   if (sameDimension(rate.dimension, wanted.dimension)) return rate;

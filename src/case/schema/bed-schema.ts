@@ -59,7 +59,8 @@ export const heatSchema = z.strictObject({
       heat_capacity: later('`coolant.heat_capacity`'),
       direction: later('`coolant.direction`'),
     })
-    .optional(),
+    .optional()
+    .meta({ description: 'what takes up the heat on the other side of the wall' }),
   radial: later('`heat.radial`'),
 });
 export type HeatInput = z.output<typeof heatSchema>;

@@ -29,6 +29,8 @@ const shape = z
     custom: later('the shape `custom`'),
   })
   .transform((read, context) => {
+    // A shape of an unknown name is reported as such.
+    if (context.issues.length > 0) return z.NEVER;
     const given = [read.sphere, read.slab, read.cylinder].filter((entry) => entry !== undefined).length;
     if (given === 1) return read;
     addFault(context, {
@@ -37,7 +39,8 @@ const shape = z
       expected: 'one of sphere, slab, cylinder',
     });
     return z.NEVER;
-  });
+  })
+  .meta({ description: 'form and size of the pellet: `{sphere: {diameter: 4 mm}}`' });
 
 /** One value for all species, or a map; a plain union would report both branches' faults. */
 function valueOrMap(one: z.ZodType<number>, description: string): z.ZodType<number | Record<string, number>> {

@@ -8,15 +8,15 @@ import {
   positive,
   property,
   quantity,
-  temperature,
   text,
   type PropertyValue,
 } from './leaves.js';
 
 const nasaRange = z
   .strictObject({
-    from: temperature('lowest temperature of the range'),
-    to: temperature('highest temperature of the range'),
+    // Published ranges go to 6000 K and beyond, further than any bed.
+    from: quantity('temperature', 'lowest temperature of the range', { above: 0 }),
+    to: quantity('temperature', 'highest temperature of the range', { above: 0 }),
     coefficients: z
       .unknown()
       .transform((value, context): number[] => {
