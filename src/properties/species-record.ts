@@ -1,4 +1,5 @@
 import type { CheckedFormula } from '../expressions/expression.js';
+import type { FluidProperty } from './fluid-property.js';
 
 /** One temperature range of a NASA polynomial. Seven coefficients plus two integration constants. */
 export interface NasaRange {
@@ -49,8 +50,20 @@ export interface SpeciesRecord {
   readonly acentricFactor?: number;
   /** C m */
   readonly dipoleMoment?: number;
+  /** Of Chung et al. (1984) for hydrogen-bonding vapours, dimensionless; absent means 0. */
+  readonly associationFactor?: number;
+  readonly lennardJones?: {
+    /** m */
+    readonly collisionDiameter: number;
+    /** Depth of the well over Boltzmann's constant, K. */
+    readonly wellDepth: number;
+  };
   /** Diffusion volume of Fuller, Schettler and Giddings, dimensionless. */
   readonly diffusionVolume?: number;
+  /** Of the pure gas, Pa s; takes the place of an estimate. */
+  readonly viscosity?: FluidProperty;
+  /** Of the pure gas, W/(m K); takes the place of an estimate. */
+  readonly thermalConductivity?: FluidProperty;
   /** Where the numbers come from: `own record in the case` or the library's sources, one line. */
   readonly source: string;
 }

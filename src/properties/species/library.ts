@@ -9,6 +9,9 @@ const nineConstantExponents = [-2, -1, 0, 1, 2, 3, 4] as const;
 /** One debye, C m. @source 1e-18 esu cm; 1e-21/c C m with the SI speed of light, rounded */
 const debye = 3.33564e-30;
 
+/** m, by definition. */
+const angstrom = 1e-10;
+
 const entries: ReadonlyMap<string, LibraryEntry> = new Map(libraryEntries.map((entry) => [entry.id, entry]));
 
 /** Ids of all species in the library, in the order of its table. */
@@ -51,6 +54,13 @@ function toSpeciesRecord(entry: LibraryEntry): SpeciesRecord {
     acentricFactor: entry.acentricFactor[0],
     dipoleMoment: entry.dipoleMoment[0] * debye,
     diffusionVolume: entry.diffusionVolume[0],
+    ...(entry.associationFactor && { associationFactor: entry.associationFactor[0] }),
+    ...(entry.lennardJones && {
+      lennardJones: {
+        collisionDiameter: entry.lennardJones.collisionDiameter * angstrom,
+        wellDepth: entry.lennardJones.wellDepth,
+      },
+    }),
     source: describeSource(entry),
   };
 }
