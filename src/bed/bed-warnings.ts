@@ -1,6 +1,7 @@
 import type { Balances } from './balances.js';
 import type { ReactorModel } from './reactor-model.js';
-import type { Profile, RunResult } from './run-result.js';
+import type { RunResult } from './run-result.js';
+import type { Tabulation } from './tabulate.js';
 
 /** Balances that close worse than this deserve a word; rounding leaves about 1e-15. */
 const closureAlarm = 1e-9;
@@ -15,7 +16,7 @@ const narrowTube = 10;
 export function bedWarnings(
   model: ReactorModel,
   balances: Balances,
-  profile: Profile,
+  { profile, reynoldsNumbers }: Tabulation,
   closure: RunResult['balances'],
   peakTemperature: number,
 ): string[] {
@@ -50,24 +51,16 @@ export function bedWarnings(
       `The tube is ${ratio.toFixed(1)} pellet diameters wide; below about ${narrowTube} gas passes along the wall and the friction law and plug flow are less sure (common practice).`,
     );
   }
-  if (balances.pressureIndex >= 0 && model.viscosity) {
-    const outside = reynoldsOutside(model, profile);
+  if (balances.pressureIndex >= 0) {
+    const outside = reynoldsOutside(reynoldsNumbers);
     if (outside) warnings.push(outside);
   }
   return warnings;
 }
 
-function reynoldsOutside(model: ReactorModel, profile: Profile): string | undefined {
-  let lowest = Infinity;
-  let highest = 0;
-  profile.temperatures.forEach((temperature, row) => {
-    const viscosity = model.viscosity!.value(temperature, profile.pressures[row]!);
-    const value =
-      (model.massFlux * model.specification.pellet.geometry.sauterDiameter) /
-      (viscosity * model.solidFraction);
-    lowest = Math.min(lowest, value);
-    highest = Math.max(highest, value);
-  });
+function reynoldsOutside(numbers: Float64Array): string | undefined {
+  const lowest = Math.min(...numbers);
+  const highest = Math.max(...numbers);
   if (lowest >= frictionRange.lowest && highest <= frictionRange.highest) return undefined;
   return `The packed-bed Reynolds number runs from ${lowest.toPrecision(3)} to ${highest.toPrecision(3)}; the friction law was fitted for ${frictionRange.lowest} to ${frictionRange.highest} (Ergun 1952).`;
 }

@@ -25,6 +25,8 @@ export function closures(
     flows.reduce((sum, flow, i) => sum + flow * (species[i]!.elements?.[element] ?? 0), 0);
   const fedElements = perElement.map((element) => contentOf(feedFlows, element));
   const elements = Object.fromEntries(perElement.map((element) => [element, 0]));
+  balances.unpack(balances.initialState);
+  const feedResidual = balances.conditions.residualEnthalpyFlow;
   let mass = 0;
   let energy = 0;
   for (let row = 0; row < positions.length; row++) {
@@ -39,7 +41,8 @@ export function closures(
       elements[element] = Math.max(elements[element]!, off);
     });
     if (heatContent && balances.heatIndex >= 0) {
-      const sensible = heatContent.sensible(flows, temperature);
+      const sensible =
+        heatContent.sensible(flows, temperature) + balances.conditions.residualEnthalpyFlow - feedResidual;
       const reacted = heatContent.referenceHeats.reduce((sum, heat, j) => sum + heat * state[j]!, 0);
       const removed = state[balances.heatIndex]!;
       const scale = Math.max(Math.abs(reacted), heatContent.capacityFlow(flows, temperature));

@@ -7,15 +7,14 @@ import type { DimensionlessGroup } from './run-result.js';
 export function inletGroups(model: ReactorModel, balances: Balances): DimensionlessGroup[] {
   balances.unpack(balances.initialState);
   return [
-    ...bedGroups(model, balances),
+    ...bedGroups(model),
     ...model.specification.reactions.flatMap((_reaction, j) => reactionGroups(model, balances, j)),
   ];
 }
 
-function bedGroups(model: ReactorModel, balances: Balances): DimensionlessGroup[] {
+function bedGroups(model: ReactorModel): DimensionlessGroup[] {
   const { specification, massFlux, solidFraction } = model;
   const { bed, pellet } = specification;
-  const { temperature, pressure } = balances.conditions;
   const diameter = pellet.geometry.sauterDiameter;
   const groups: DimensionlessGroup[] = [
     {
@@ -33,10 +32,11 @@ function bedGroups(model: ReactorModel, balances: Balances): DimensionlessGroup[
       source: 'common practice',
     },
   ];
-  if (model.viscosity) {
+  const { viscosity } = model.localProperties;
+  if (viscosity > 0) {
     groups.push({
       name: 'packed-bed Reynolds number',
-      value: (massFlux * diameter) / (model.viscosity.value(temperature, pressure) * solidFraction),
+      value: (massFlux * diameter) / (viscosity * solidFraction),
       unit: '1',
       definition: 'G d / (μ (1-ε)), G superficial mass flux, d Sauter diameter',
       source: 'Ergun (1952), Chem. Eng. Prog. 48, 89',
@@ -49,8 +49,9 @@ function reactionGroups(model: ReactorModel, balances: Balances, j: number): Dim
   const { specification, speciesCount, rateFactors, stoichiometry, feedFlows } = model;
   const { pellet, reactions, bed } = specification;
   const { conditions } = balances;
+  const { transport } = model.localProperties;
   const row = stoichiometry[j]!;
-  const key = limitingReactant(row, conditions.concentrations, pellet.effectiveDiffusivities);
+  const key = limitingReactant(row, conditions.concentrations, transport.effectiveDiffusivities);
   if (key === undefined) return [];
   const rates = new Float64Array(model.reactionCount);
   const columns = speciesCount + 2;
@@ -71,7 +72,7 @@ function reactionGroups(model: ReactorModel, balances: Balances, j: number): Dim
   const of = `${reactions[j]!.name} (${specification.species[key]!.id})`;
   const length = pellet.geometry.diffusionLength;
   const consumption = rate * -row[key]!;
-  const diffusivity = pellet.effectiveDiffusivities[key]!;
+  const diffusivity = transport.effectiveDiffusivities[key]!;
   const { temperature } = conditions;
   // d ln r / d ln T at constant partial pressures is E/(R T) for an Arrhenius law; ours is at constant concentrations.
   const byTemperature = gradient[j * columns + speciesCount]! * rateFactors[j]!;
@@ -105,7 +106,7 @@ function reactionGroups(model: ReactorModel, balances: Balances, j: number): Dim
     });
     push({
       name: 'Biot number for mass',
-      value: (pellet.film.massTransfer[key]! * length) / diffusivity,
+      value: (transport.massTransfer[key]! * length) / diffusivity,
       unit: '1',
       definition: 'kc (V/S) / De',
       source: 'definition',
@@ -116,14 +117,15 @@ function reactionGroups(model: ReactorModel, balances: Balances, j: number): Dim
   if (knowsHeat && (pellet.method.kind === 'full' || pellet.method.kind === 'thiele')) {
     push({
       name: 'Prater number',
-      value: (-heat * diffusivity * concentration) / (-row[key]! * pellet.thermalConductivity * temperature),
+      value:
+        (-heat * diffusivity * concentration) / (-row[key]! * transport.thermalConductivity * temperature),
       unit: '1',
       definition: '(-ΔH) De c / (λ T): largest inner temperature rise over bulk temperature',
       source: 'Prater (1958), Chem. Eng. Sci. 8, 284',
     });
     push({
       name: 'Biot number for heat',
-      value: (pellet.film.heatTransfer * length) / pellet.thermalConductivity,
+      value: (transport.heatTransfer * length) / transport.thermalConductivity,
       unit: '1',
       definition: 'h (V/S) / λ',
       source: 'definition',
@@ -177,7 +179,7 @@ function sumOfOrders(
 function limitingReactant(
   row: readonly number[],
   concentrations: Float64Array,
-  diffusivities: readonly number[],
+  diffusivities: Float64Array,
 ): number | undefined {
   let best: number | undefined;
   let smallest = Infinity;

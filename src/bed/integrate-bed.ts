@@ -45,7 +45,7 @@ const reasonOfFailure: Record<BalanceFailure['kind'], StopReason> = {
   no_state: 'no_pellet_state',
   overdrawn: 'reactant_overdrawn',
   rates_not_finite: 'rate_not_finite',
-  temperature: 'property_range_left',
+  conditions: 'property_range_left',
 };
 
 /** Why an integration did not reach the end of the bed; undefined when it did. */

@@ -6,11 +6,14 @@ import type { RateBasis } from '../kinetics/reaction-record.js';
 import { createPelletModel } from '../pellet/create-pellet-model.js';
 import type { PelletModel } from '../pellet/pellet-model.js';
 import type { RateEvaluator } from '../kinetics/rate-evaluator.js';
-import { createPropertyFunction, type FluidPropertyFunction } from '../properties/fluid-property.js';
+import { createEquationOfState } from '../properties/equation-of-state/create-equation-of-state.js';
+import type { EquationOfState } from '../properties/equation-of-state/equation-of-state.js';
+import { createPropertyFunction } from '../properties/fluid-property.js';
 import { createEquilibriumConstant } from '../properties/reaction-equilibrium.js';
 import { createSpeciesThermochemistry, type SpeciesThermochemistry } from '../properties/thermochemistry.js';
 import { frictionCoefficients, type FrictionCoefficients } from './friction.js';
 import { givenHeatContent, speciesHeatContent, type HeatContent } from './heat-content.js';
+import { createLocalProperties, type LocalProperties } from './local-properties.js';
 import type { ReactorSpecification } from './reactor-specification.js';
 
 export interface ReactorModel {
@@ -33,7 +36,12 @@ export interface ReactorModel {
   /** Pellet volume per bed volume. */
   readonly solidFraction: number;
   readonly friction: FrictionCoefficients | undefined;
-  readonly viscosity: FluidPropertyFunction | undefined;
+  readonly equationOfState: EquationOfState;
+  /** Whether the energy balance counts the real fluid's departure from the ideal gas; not where the mixture's heat capacity is given. */
+  readonly countsResidualEnthalpy: boolean;
+  /** Compressibility factor, then each species' fugacity coefficient, at the present position: read by the rate laws; absent in an ideal gas. */
+  readonly lawFactors: Float64Array | undefined;
+  readonly localProperties: LocalProperties;
   /** Undefined where neither heats nor heat capacities are known, which only an isothermal bed may be. */
   readonly heatContent: HeatContent | undefined;
   readonly thermochemistry: readonly SpeciesThermochemistry[];
@@ -65,12 +73,16 @@ export function createReactorModel(specification: ReactorSpecification): Reactor
     bed_volume: 1 / solidFraction,
   };
   const rateFactors = reactions.map(({ basis }) => pellet.activity * perPelletVolume[basis]);
+  const equationOfState = createEquationOfState(fluid.equationOfState, species);
+  const lawFactors = equationOfState.isIdealGas ? undefined : new Float64Array(species.length + 1).fill(1);
+  const localProperties = createLocalProperties(specification);
   const equilibriumConstants = (reaction: number): ReturnType<typeof createEquilibriumConstant> =>
     createEquilibriumConstant(stoichiometry[reaction]!, thermochemistry);
   const rates = compileRates(
     reactions.map(({ rate }) => rate.expression),
     species.length,
     equilibriumConstants,
+    lawFactors,
   );
   const isIsothermal = heat.mode === 'isothermal';
   const usedSpecies = isIsothermal || fluid.heatCapacity.kind === 'given' ? [] : thermochemistry;
@@ -95,13 +107,19 @@ export function createReactorModel(specification: ReactorSpecification): Reactor
             bed.voidFraction,
             pellet.geometry.sauterDiameter,
           ),
-    viscosity: fluid.viscosity && createPropertyFunction(fluid.viscosity),
+    equationOfState,
+    countsResidualEnthalpy:
+      !equationOfState.isIdealGas && !isIsothermal && fluid.heatCapacity.kind === 'species',
+    lawFactors,
+    localProperties,
     heatContent,
     thermochemistry,
     rates,
     rateFactors,
     pellet: createPelletModel({
       pellet,
+      transport: localProperties.transport,
+      transportVaries: localProperties.transportVaries,
       speciesCount: species.length,
       stoichiometry,
       rates,

@@ -1,5 +1,6 @@
 import type { ReactionRecord } from '../kinetics/reaction-record.js';
-import type { PelletSpecification } from '../pellet/pellet-specification.js';
+import type { LocalProperty, PelletSpecification } from '../pellet/pellet-specification.js';
+import type { EquationOfStateSpecification } from '../properties/equation-of-state/create-equation-of-state.js';
 import type { FluidProperty } from '../properties/fluid-property.js';
 import type { SpeciesRecord } from '../properties/species-record.js';
 
@@ -9,6 +10,13 @@ export type { FluidProperty };
 export type MixtureHeatCapacity =
   | { readonly kind: 'species' }
   | { readonly kind: 'given'; readonly per: 'mass' | 'amount'; readonly property: FluidProperty };
+
+/**
+ * - `wilke`: each species through a mixture that stands still
+ * - `blanc`: each species as a trace
+ * - `flux_ratios`: fluxes in the ratio of one reaction's stoichiometry
+ */
+export type DiffusivityMixing = 'wilke' | 'blanc' | 'flux_ratios';
 
 export type PressureDropSpecification =
   | { readonly kind: 'none' }
@@ -69,9 +77,15 @@ export interface ReactorSpecification {
   };
   readonly fluid: {
     readonly phase: 'gas';
-    readonly equationOfState: 'ideal';
-    /** Pa s; absent only where no correlation needs it. */
-    readonly viscosity?: FluidProperty;
+    readonly equationOfState: EquationOfStateSpecification;
+    /** Pa s */
+    readonly viscosity: LocalProperty;
+    /** W/(m K) */
+    readonly thermalConductivity: LocalProperty;
+    /** m²/s, of each species in the mixture. */
+    readonly diffusivities: readonly LocalProperty[];
+    /** How diffusivities to be estimated follow from those of the pairs. */
+    readonly diffusivityMixing: DiffusivityMixing;
     readonly heatCapacity: MixtureHeatCapacity;
   };
   readonly pellet: PelletSpecification;

@@ -76,7 +76,7 @@ export function solveReactor(specification: ReactorSpecification): RunResult {
     balances: closure,
     groups,
     events: runEvents,
-    warnings: bedWarnings(model, balances, tabulation.profile, closure, peak.temperature),
+    warnings: bedWarnings(model, balances, tabulation, closure, peak.temperature),
     assumptions: collectAssumptions(specification),
     work: {
       steps: integration.work.steps,

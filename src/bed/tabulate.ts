@@ -16,6 +16,8 @@ export interface Tabulation {
   readonly bulkRates: readonly Float64Array[];
   /** Averaged rates, same unit. */
   readonly averageRates: readonly Float64Array[];
+  /** G d / (μ (1-ε)) with the Sauter diameter; NaN where no viscosity is needed. */
+  readonly reynoldsNumbers: Float64Array;
 }
 
 /**
@@ -52,6 +54,8 @@ export function tabulate(
   const rates = columns(reactionCount);
   const effectiveness = columns(reactionCount);
   const bulkRates = columns(reactionCount);
+  const reynoldsNumbers = column();
+  const reynoldsFlux = (model.massFlux * specification.pellet.geometry.sauterDiameter) / model.solidFraction;
   const averageRates = columns(reactionCount);
   const atBulk = new Float64Array(reactionCount);
   const gradient = new Float64Array(reactionCount * (speciesCount + 2));
@@ -63,6 +67,7 @@ export function tabulate(
     const isSolved = isKnown && model.pellet.solve(conditions) === 'converged';
     temperatures[row] = conditions.temperature;
     pressures[row] = conditions.pressure;
+    reynoldsNumbers[row] = reynoldsFlux / model.localProperties.viscosity;
     surfaceTemperatures[row] = isSolved ? model.pellet.surfaceTemperature() : Number.NaN;
     centreTemperatures[row] = isSolved ? model.pellet.centreTemperature() : Number.NaN;
     for (let i = 0; i < speciesCount; i++) {
@@ -105,6 +110,7 @@ export function tabulate(
     },
     bulkRates,
     averageRates,
+    reynoldsNumbers,
   };
 }
 

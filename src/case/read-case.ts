@@ -6,8 +6,10 @@ import type { Assumption, ReactorSpecification } from '../bed/reactor-specificat
 import { CaseError } from '../diagnostics/case-error.js';
 import type { Problem } from '../diagnostics/problem.js';
 import { buildMolarFlows } from './build/build-feed.js';
+import { buildFluid } from './build/build-fluid.js';
+import { createMolarDensity } from './build/molar-density.js';
 import { buildPellet } from './build/build-pellet.js';
-import { buildBed, buildFluid, buildHeat, buildOutput, buildTargets } from './build/build-plant.js';
+import { buildBed, buildHeat, buildOutput, buildTargets } from './build/build-plant.js';
 import { readConstants } from './build/build-constants.js';
 import { buildReactions } from './build/build-reactions.js';
 import { buildSpecies } from './build/build-species.js';
@@ -92,13 +94,18 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
   const reactions = buildReactions(context, species, readConstants(context, ['constants'], new Map()));
   const bedInput = readSection(context, ['bed'], bedSchema);
   const feed = readKeys(context, ['feed'], feedSchema);
-  const molarFlows = feed && species && buildMolarFlows(context, feed, species, bedInput);
   const heatReading = readKeys(context, ['heat'], heatSchema);
   const heat = heatReading && buildHeat(context, heatReading);
   const heatMode = heatReading?.values.mode;
   const fluidReading = readKeys(context, ['fluid'], fluidSchema);
   const isFluidRead = fluidReading !== undefined || !root.entries.has('fluid');
-  const fluid = isFluidRead ? buildFluid(context, fluidReading, bedInput, assumptions) : undefined;
+  const reactionCount = reactions?.records.length ?? 1;
+  const fluid =
+    isFluidRead && species
+      ? buildFluid(context, fluidReading, species.ids, reactionCount, assumptions)
+      : undefined;
+  const molarDensity = createMolarDensity(context, fluid?.equationOfState, species);
+  const molarFlows = feed && species && buildMolarFlows(context, feed, species, bedInput, molarDensity);
   const limits = readSection(context, ['limits'], limitsSchema) ?? {};
   const targets = readSection(context, ['targets'], targetsSchema) ?? {};
   const output = readSection(context, ['output'], outputSchema) ?? {};

@@ -194,7 +194,9 @@ class Walk {
         'bad_formula',
         span,
         `\`${mapName}.${property}\``,
-        this.scope.speciesIds.length === 0 ? 'no composition in this formula' : 'a dot only behind p, c or y',
+        this.scope.speciesIds.length === 0
+          ? 'no composition in this formula'
+          : 'a dot only behind p, c, y or f',
       );
     }
     const speciesIndex = this.scope.speciesIds.indexOf(property);
@@ -205,15 +207,6 @@ class Walk {
         `\`${property}\`, which is no species of this case`,
         `one of ${this.scope.speciesIds.join(', ')}`,
         didYouMean(property, this.scope.speciesIds),
-      );
-    }
-    if (mapName === 'f') {
-      throw new FormulaFault(
-        'not_supported_yet',
-        span,
-        `\`f.${property}\`, a fugacity`,
-        'partial pressures: not supported yet',
-        `write \`p.${property}\``,
       );
     }
     const leaf = (
@@ -227,6 +220,7 @@ class Walk {
     });
     const { writtenIn } = this.scope;
     if (mapName === 'p') return this.read(leaf('partial_pressure', pressureDimension), writtenIn?.pressure);
+    if (mapName === 'f') return this.read(leaf('fugacity', pressureDimension), writtenIn?.pressure);
     if (mapName === 'c')
       return this.read(leaf('concentration', concentrationDimension), writtenIn?.concentration);
     return leaf('mole_fraction', dimensionless);

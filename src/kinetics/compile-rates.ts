@@ -6,7 +6,7 @@ import { differentiate } from '../expressions/compile/differentiate.js';
 import { emitStatements, type Assignment } from '../expressions/compile/emit.js';
 import { Graph } from '../expressions/compile/graph.js';
 import { instantiate, type ThermalFunction } from '../expressions/compile/instantiate.js';
-import { idealGasLeaf, lower } from '../expressions/compile/lower.js';
+import { fluidLeaf, lower } from '../expressions/compile/lower.js';
 import type { Expression } from '../expressions/expression.js';
 import type { RateEvaluator, RateFunction, RateGradientFunction } from './rate-evaluator.js';
 
@@ -17,17 +17,24 @@ export interface EquilibriumConstantFunction {
 }
 
 /**
- * @param rates - one expression per reaction; variables of an ideal gas
+ * @param rates - one expression per reaction
  * @param equilibriumConstants - asked only for reactions whose law names `K_eq`
+ * @param lawFactors - compressibility factor, then the fugacity coefficient of each species, read anew at each evaluation; absent in an
+ *   ideal gas. The derivatives hold them fixed.
  */
 export function compileRates(
   rates: readonly Expression[],
   speciesCount: number,
   equilibriumConstants: (reactionIndex: number) => EquilibriumConstantFunction,
+  lawFactors?: Float64Array,
 ): RateEvaluator {
   const graph = new Graph();
   const concentrations = Array.from({ length: speciesCount }, (_, i) => graph.input(`c[o + ${i}]`));
-  const leaf = idealGasLeaf(graph, (speciesIndex) => concentrations[speciesIndex]!);
+  const leaf = fluidLeaf(
+    graph,
+    (speciesIndex) => concentrations[speciesIndex]!,
+    lawFactors && ((index) => graph.input(`w[${index}]`)),
+  );
   const results = rates.map((rate) => lower(graph, rate, leaf));
   const inputs = [...concentrations, graph.input('T'), graph.input('P')];
   const values = results.map((node, j): Assignment => ({ target: `r[q + ${j}] =`, node }));
@@ -49,7 +56,7 @@ export function compileRates(
   const equilibrium: ThermalFunction = (reaction, temperature) => functionOf(reaction).value(temperature);
   const slope: ThermalFunction = (reaction, temperature) => functionOf(reaction).derivative(temperature);
   const make = (parameters: readonly string[], assignments: readonly Assignment[]): unknown =>
-    instantiate(parameters, emitStatements(graph, assignments), equilibrium, slope);
+    instantiate(parameters, emitStatements(graph, assignments), equilibrium, slope, lawFactors);
   return {
     reactionCount: rates.length,
     speciesCount,

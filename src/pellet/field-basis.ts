@@ -20,46 +20,58 @@ export interface FieldBasis {
   readonly independent: readonly number[];
   /** Species that take part, ascending; the others keep their bulk concentration. */
   readonly activeSpecies: Int32Array;
-  /** Row-major `fieldCount × speciesCount`: ν_ik / De_i. */
+  /** Row-major `fieldCount × speciesCount`: ν_ik / De_i. These four follow the pellet's transport: `refreshFieldBasis`. */
   readonly diffusionCoefficients: Float64Array;
   /** Row-major `fieldCount × speciesCount`: ν_ik L / kc_i. */
   readonly filmCoefficients: Float64Array;
   /** 1/λ and L/h, multiplied by -ΔH_k where used. */
-  readonly inverseConductivity: number;
-  readonly filmHeatResistance: number;
+  inverseConductivity: number;
+  filmHeatResistance: number;
   readonly hasFilm: boolean;
 }
 
 export function createFieldBasis(input: PelletModelInput): FieldBasis {
-  const { pellet, speciesCount, stoichiometry, referenceHeats } = input;
+  const { speciesCount, stoichiometry, referenceHeats, transport } = input;
   const { independent, combination } = findReactionBasis(stoichiometry, referenceHeats);
   const fieldCount = independent.length;
-  const { diffusionLength } = pellet.geometry;
-  const diffusionCoefficients = new Float64Array(fieldCount * speciesCount);
-  const filmCoefficients = new Float64Array(fieldCount * speciesCount);
   const activeSpecies: number[] = [];
   for (let i = 0; i < speciesCount; i++) {
     if (stoichiometry.some((row) => row[i] !== 0)) activeSpecies.push(i);
   }
-  independent.forEach((reaction, k) => {
-    activeSpecies.forEach((i) => {
-      const coefficient = stoichiometry[reaction]![i]!;
-      diffusionCoefficients[k * speciesCount + i] = coefficient / pellet.effectiveDiffusivities[i]!;
-      filmCoefficients[k * speciesCount + i] = (coefficient * diffusionLength) / pellet.film.massTransfer[i]!;
-    });
-  });
   const isIsothermal = referenceHeats === undefined;
-  const inverseConductivity = isIsothermal ? 0 : 1 / pellet.thermalConductivity;
-  const filmHeatResistance = isIsothermal ? 0 : diffusionLength / pellet.film.heatTransfer;
-  return {
+  const basis: FieldBasis = {
     fieldCount,
     combination,
     independent,
     activeSpecies: Int32Array.from(activeSpecies),
-    diffusionCoefficients,
-    filmCoefficients,
-    inverseConductivity,
-    filmHeatResistance,
-    hasFilm: filmHeatResistance > 0 || filmCoefficients.some((value) => value !== 0),
+    diffusionCoefficients: new Float64Array(fieldCount * speciesCount),
+    filmCoefficients: new Float64Array(fieldCount * speciesCount),
+    inverseConductivity: 0,
+    filmHeatResistance: 0,
+    hasFilm:
+      activeSpecies.some((i) => transport.massTransfer[i]! < Infinity) ||
+      (!isIsothermal && transport.heatTransfer < Infinity),
   };
+  refreshFieldBasis(basis, input);
+  return basis;
+}
+
+/** Works the coefficients out anew from the transport at the present position; whether there is a film is settled at the start. */
+export function refreshFieldBasis(basis: FieldBasis, input: PelletModelInput): void {
+  const { speciesCount, stoichiometry, referenceHeats, transport } = input;
+  const { diffusionLength } = input.pellet.geometry;
+  const { fieldCount, independent, activeSpecies, diffusionCoefficients, filmCoefficients } = basis;
+  for (let k = 0; k < fieldCount; k++) {
+    const row = stoichiometry[independent[k]!]!;
+    for (let a = 0; a < activeSpecies.length; a++) {
+      const i = activeSpecies[a]!;
+      const coefficient = row[i]!;
+      if (coefficient === 0) continue;
+      diffusionCoefficients[k * speciesCount + i] = coefficient / transport.effectiveDiffusivities[i]!;
+      filmCoefficients[k * speciesCount + i] = (coefficient * diffusionLength) / transport.massTransfer[i]!;
+    }
+  }
+  if (referenceHeats === undefined) return;
+  basis.inverseConductivity = 1 / transport.thermalConductivity;
+  basis.filmHeatResistance = diffusionLength / transport.heatTransfer;
 }

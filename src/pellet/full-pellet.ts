@@ -4,7 +4,7 @@ import {
   type ResolutionLadder,
 } from '../numerics/diffusion/resolution-ladder.js';
 import { CollocatedPellet } from './collocated-pellet.js';
-import { createFieldBasis, type FieldBasis } from './field-basis.js';
+import { createFieldBasis, refreshFieldBasis, type FieldBasis } from './field-basis.js';
 import {
   createPelletWork,
   type PelletBulk,
@@ -65,6 +65,7 @@ export class FullPellet implements PelletModel {
    */
   solve(bulk: PelletBulk): PelletStatus {
     this.lastBulk = bulk;
+    if (this.input.transportVaries) refreshFieldBasis(this.basis, this.input);
     const status = this.current.solve(bulk);
     if (status === 'converged' || status === 'rates_not_finite') return status;
     return this.rescue(bulk, status);

@@ -22,7 +22,8 @@ import type { PelletModelInput } from './pellet-model.js';
 const pathPointCount = 16;
 
 export function createGeneralisedModulusLaw(input: PelletModelInput): SurfaceLaw {
-  const { rates, rateFactors, speciesCount, stoichiometry, pellet } = input;
+  const { rates, rateFactors, speciesCount, stoichiometry, pellet, transport } = input;
+  const { effectiveDiffusivities } = transport;
   const { diffusionLength, shapeExponent } = pellet.geometry;
   const columns = speciesCount + 2;
   const reactionCount = stoichiometry.length;
@@ -35,7 +36,7 @@ export function createGeneralisedModulusLaw(input: PelletModelInput): SurfaceLaw
 
   return (concentrations, temperature, pressure, averageRates, gradient) => {
     const rateOf = (j: number, potential: number): number => {
-      placeInside(concentrations, stoichiometry[j]!, pellet.effectiveDiffusivities, potential, inside);
+      placeInside(concentrations, stoichiometry[j]!, effectiveDiffusivities, potential, inside);
       rates.evaluate(inside, 0, temperature, pressure, pathRates, 0);
       return pathRates[j]!;
     };
@@ -44,7 +45,7 @@ export function createGeneralisedModulusLaw(input: PelletModelInput): SurfaceLaw
     for (let j = 0; j < reactionCount; j++) {
       const row = stoichiometry[j]!;
       const surfaceRate = surfaceRates[j]!;
-      const end = pathEnd(j, row, concentrations, pellet.effectiveDiffusivities, surfaceRate, rateOf);
+      const end = pathEnd(j, row, concentrations, effectiveDiffusivities, surfaceRate, rateOf);
       if (surfaceRate === 0 || end.potential === 0 || !Number.isFinite(surfaceRate)) {
         averageRates[j] = rateFactors[j]! * surfaceRate;
         for (let column = 0; gradient && column < columns; column++) {
@@ -57,7 +58,7 @@ export function createGeneralisedModulusLaw(input: PelletModelInput): SurfaceLaw
       const integralGradient = new Float64Array(columns);
       path.points.forEach((v, q) => {
         const weight = 2 * v * end.potential * path.weights[q]!;
-        placeInside(concentrations, row, pellet.effectiveDiffusivities, end.potential * (1 - v * v), inside);
+        placeInside(concentrations, row, effectiveDiffusivities, end.potential * (1 - v * v), inside);
         if (gradient) {
           rates.evaluateWithGradient(inside, 0, temperature, pressure, pathRates, 0, pathGradient, 0);
           for (let column = 0; column < columns; column++) {
@@ -69,9 +70,7 @@ export function createGeneralisedModulusLaw(input: PelletModelInput): SurfaceLaw
         integral += weight * pathRates[j]!;
       });
       if (end.limitingSpecies >= 0) {
-        const reach = Math.abs(
-          pellet.effectiveDiffusivities[end.limitingSpecies]! / row[end.limitingSpecies]!,
-        );
+        const reach = Math.abs(effectiveDiffusivities[end.limitingSpecies]! / row[end.limitingSpecies]!);
         integralGradient[end.limitingSpecies]! += rateOf(j, end.potential) * reach * Math.sign(end.potential);
       }
       const modulus =
@@ -93,7 +92,7 @@ export function createGeneralisedModulusLaw(input: PelletModelInput): SurfaceLaw
 function placeInside(
   surface: Float64Array,
   row: readonly number[],
-  diffusivities: readonly number[],
+  diffusivities: Float64Array,
   potential: number,
   target: Float64Array,
 ): void {
@@ -107,7 +106,7 @@ function pathEnd(
   j: number,
   row: readonly number[],
   surface: Float64Array,
-  diffusivities: readonly number[],
+  diffusivities: Float64Array,
   surfaceRate: number,
   rateOf: (j: number, potential: number) => number,
 ): { potential: number; limitingSpecies: number } {

@@ -5,7 +5,7 @@
  * With a film the unknowns are the averaged sources <q_k> of the independent reactions, found by Newton's method.
  */
 import { factoriseInPlace, solveInPlace } from '../numerics/dense-lu.js';
-import { createFieldBasis, type FieldBasis } from './field-basis.js';
+import { createFieldBasis, refreshFieldBasis, type FieldBasis } from './field-basis.js';
 import {
   createPelletWork,
   type PelletBulk,
@@ -69,6 +69,7 @@ export class LumpedPellet implements PelletModel {
 
   solve(bulk: PelletBulk): PelletStatus {
     this.work.solves++;
+    if (this.input.transportVaries) refreshFieldBasis(this.basis, this.input);
     let status = this.iterate(bulk, 1);
     if (status !== 'converged' && this.hasFilm) {
       this.sources.fill(0);

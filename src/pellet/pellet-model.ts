@@ -1,5 +1,5 @@
 import type { RateEvaluator } from '../kinetics/rate-evaluator.js';
-import type { PelletSpecification } from './pellet-specification.js';
+import type { PelletSpecification, PelletTransport } from './pellet-specification.js';
 
 /** Conditions of the fluid around a pellet. The arrays belong to the caller and are only read. */
 export interface PelletBulk {
@@ -63,6 +63,9 @@ export interface PelletModel {
 /** Everything a pellet model is made from. */
 export interface PelletModelInput {
   readonly pellet: PelletSpecification;
+  /** Read anew at each solve where `transportVaries`; its owner sets it to the bulk conditions beforehand. */
+  readonly transport: PelletTransport;
+  readonly transportVaries: boolean;
   readonly speciesCount: number;
   /** One row per reaction, one entry per species. */
   readonly stoichiometry: readonly (readonly number[])[];

@@ -4,6 +4,7 @@ import { parseFormula } from '../../src/expressions/parse-formula.js';
 import type { CheckedFormula, Expression } from '../../src/expressions/expression.js';
 import { sphereGeometry } from '../../src/pellet/shapes.js';
 import type { Dimension } from '../../src/quantities/dimension.js';
+import { constant, givenTransport, idealGas } from '../pellet/given-transport.js';
 
 /** mol/(kg s bar²) in SI: 1e-10 */
 const perBarSquared = 1e-10;
@@ -94,20 +95,21 @@ export function cooledOxidation(change: Partial<ReactorSpecification> = {}): Rea
       pressure: 1.6e5,
       molarFlows: feedFractions.map((y) => y * totalFlow),
     },
-    fluid: {
-      phase: 'gas',
-      equationOfState: 'ideal',
-      viscosity: { kind: 'constant', value: 3.1e-5 },
-      heatCapacity: { kind: 'given', per: 'mass', property: { kind: 'constant', value: 1060 } },
-    },
+    fluid: idealGas(6, {
+      viscosity: constant(3.1e-5),
+      heatCapacity: { kind: 'given', per: 'mass', property: constant(1060) },
+    }),
     pellet: {
       geometry: sphereGeometry(4e-3),
       method: { kind: 'full' },
       density: 1800,
       activity: 1,
-      effectiveDiffusivities: [1.3e-6, 1.1e-6, 3.2e-6, 4.2e-6, 2.6e-6, Infinity],
-      thermalConductivity: 0.35,
-      film: { massTransfer: [0.075, 0.066, 0.15, 0.18, 0.125, Infinity], heatTransfer: 190 },
+      transport: givenTransport({
+        diffusivities: [1.3e-6, 1.1e-6, 3.2e-6, 4.2e-6, 2.6e-6, Infinity],
+        thermalConductivity: 0.35,
+        massTransfer: [0.075, 0.066, 0.15, 0.18, 0.125, Infinity],
+        heatTransfer: 190,
+      }),
     },
     bed: {
       tubeDiameter,

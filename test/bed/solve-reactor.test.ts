@@ -10,6 +10,7 @@ import { gasConstant } from '../../src/quantities/constants.js';
 import type { Dimension } from '../../src/quantities/dimension.js';
 import { readReference } from '../reference/read-reference.js';
 import { cooledOxidation } from './cooled-oxidation.js';
+import { givenTransport } from '../pellet/given-transport.js';
 
 interface CooledBedReference {
   readonly values: {
@@ -174,8 +175,7 @@ function simpleBed(change: Partial<ReactorSpecification> = {}): ReactorSpecifica
     pellet: {
       ...one.pellet,
       method: { kind: 'intrinsic' },
-      effectiveDiffusivities: [5e-7, 5e-7],
-      film: { massTransfer: [Infinity, Infinity], heatTransfer: Infinity },
+      transport: givenTransport({ diffusivities: [5e-7, 5e-7] }),
     },
     bed: { tubeDiameter: 0.04, tubes: 1, length: 1.5, voidFraction: 0.4, pressureDrop: { kind: 'none' } },
     heat: { mode: 'isothermal' },
@@ -307,8 +307,7 @@ describe('species thermochemistry in the bed', () => {
       fluid: { ...base.fluid, heatCapacity: { kind: 'species' } },
       pellet: {
         ...base.pellet,
-        effectiveDiffusivities: ids.map(() => 1e-6),
-        film: { massTransfer: ids.map(() => Infinity), heatTransfer: Infinity },
+        transport: givenTransport({ diffusivities: ids.map(() => 1e-6), thermalConductivity: 0.35 }),
       },
       heat: { mode: 'adiabatic' },
     };

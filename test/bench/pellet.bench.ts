@@ -40,6 +40,8 @@ describe('pellet: three reactions, not isothermal, film', () => {
   bench('new model, cold solution', () => {
     const input = {
       pellet: model.specification.pellet,
+      transport: model.localProperties.transport,
+      transportVaries: false,
       speciesCount: model.speciesCount,
       stoichiometry: model.stoichiometry,
       rates: model.rates,

@@ -191,7 +191,6 @@ describe('parseFormula: what it refuses', () => {
     ['k * «p»', 'bad_formula'],
     ['«x.A»', 'bad_formula'],
     ['«T.A»', 'bad_formula'],
-    ['k * «f.A»', 'not_supported_yet'],
     ['k * «sin»(T)', 'bad_formula'],
     ['«ln»(T / 1 K)', 'bad_formula'],
     ['«k»(2)', 'bad_formula'],

@@ -1,6 +1,7 @@
 import type { RateEvaluator } from '../../src/kinetics/rate-evaluator.js';
 import type { PelletBulk, PelletModelInput } from '../../src/pellet/pellet-model.js';
 import type { PelletMethod } from '../../src/pellet/pellet-specification.js';
+import { givenTransport, transportNumbers } from './given-transport.js';
 
 /** One rate law by hand: value and its derivatives with respect to the concentrations and temperature. */
 export type HandLaw = (
@@ -61,13 +62,10 @@ export function singlePellet(options: SinglePelletOptions): PelletModelInput {
       method: options.method ?? { kind: 'full' },
       density: 1000,
       activity: 1,
-      effectiveDiffusivities: options.diffusivities,
-      thermalConductivity: options.thermalConductivity ?? Infinity,
-      film: {
-        massTransfer: options.massTransfer ?? options.diffusivities.map(() => Infinity),
-        heatTransfer: options.heatTransfer ?? Infinity,
-      },
+      transport: givenTransport(options),
     },
+    transport: transportNumbers(options),
+    transportVaries: false,
     speciesCount,
     stoichiometry: options.stoichiometry,
     rates: handRates(options.laws, speciesCount),

@@ -1,6 +1,7 @@
 import type { ReactorSpecification } from '../../src/bed/reactor-specification.js';
 import type { SpeciesRecord } from '../../src/properties/species-record.js';
 import { readFormula } from './evaluate-formula.js';
+import { constant, givenTransport, idealGas } from '../pellet/given-transport.js';
 
 export interface PlainReactor {
   readonly species: readonly SpeciesRecord[];
@@ -45,12 +46,10 @@ export function plainReactor(plain: PlainReactor): ReactorSpecification {
       ...(heat !== undefined && { heat: { value: heat } }),
     })),
     feed: { temperature: plain.temperature, pressure: plain.pressure, molarFlows: plain.molarFlows },
-    fluid: {
-      phase: 'gas',
-      equationOfState: 'ideal',
-      heatCapacity: plain.heatCapacity ?? { kind: 'species' },
-      ...(plain.viscosity !== undefined && { viscosity: { kind: 'constant', value: plain.viscosity } }),
-    },
+    fluid: idealGas(plain.species.length, {
+      ...(plain.heatCapacity && { heatCapacity: plain.heatCapacity }),
+      ...(plain.viscosity !== undefined && { viscosity: constant(plain.viscosity) }),
+    }),
     pellet: {
       geometry: {
         diffusionLength: pelletDiameter / 6,
@@ -61,9 +60,7 @@ export function plainReactor(plain: PlainReactor): ReactorSpecification {
       method: { kind: 'intrinsic' },
       density: plain.pelletDensity,
       activity: 1,
-      effectiveDiffusivities: plain.species.map(() => Infinity),
-      thermalConductivity: Infinity,
-      film: { massTransfer: plain.species.map(() => Infinity), heatTransfer: Infinity },
+      transport: givenTransport({ diffusivities: plain.species.map(() => Infinity) }),
     },
     bed: {
       tubeDiameter: plain.tubeDiameter,

@@ -52,7 +52,6 @@ const tricks: readonly Trick[] = [
   { name: 'property of a function', text: 'exp.constructor', at: 'exp.constructor' },
   { name: 'map without a species', text: 'p', at: 'p' },
   { name: 'map with a dot alone', text: 'p.' },
-  { name: 'fugacity', text: 'k * f.A', code: 'not_supported_yet', at: 'f.A' },
   { name: 'fugacity of no species', text: 'f.constructor', code: unknown, at: 'constructor' },
   { name: 'call of a species', text: 'p.A(1)' },
   // The parser's own language.

@@ -1,15 +1,22 @@
-import { gasConstant } from '../../quantities/constants.js';
 import { listNames } from '../../diagnostics/list-names.js';
 import { didYouMean } from '../../diagnostics/nearest-name.js';
 import { formatPath, keyProblemAt, problemAt, type CaseContext, type CasePath } from '../case-context.js';
 import { reportUnknownKey, type SectionReading } from '../read-section.js';
 import type { BedInput } from '../schema/bed-schema.js';
+import type { OneOrEach } from '../schema/choices.js';
 import type { FeedInput } from '../schema/feed-schema.js';
 import type { SpeciesSection } from './build-species.js';
 import { complete } from './holes.js';
 
 /** Fractions that are all given must sum to one this closely: one unit in the sixth place. */
 const sumTolerance = 1e-6;
+
+/** mol/m³ of a mixture; undefined where it cannot be told. */
+export type MolarDensity = (
+  moleFractions: readonly number[],
+  temperature: number,
+  pressure: number,
+) => number | undefined;
 
 const flowKeys = [
   'molar_flow',
@@ -43,6 +50,7 @@ export function checkSpeciesKeys(
 /**
  * Molar flows of the whole reactor, mol/s, in case order.
  *
+ * @param molarDensity - of the feed, mol/m³; asked only where the flow is given by volume
  * @param bed - needed for a flux, a velocity or a space velocity; undefined where its section is at fault
  * @returns undefined where anything they follow from is missing or at fault, with a problem reported
  */
@@ -51,6 +59,7 @@ export function buildMolarFlows(
   reading: SectionReading<FeedInput>,
   species: SpeciesSection,
   bed: BedInput | undefined,
+  molarDensity: MolarDensity,
 ): number[] | undefined {
   if (reading.isGiven('molar_flows')) return readMolarFlows(context, reading, species);
   const { values, isGiven } = reading;
@@ -69,7 +78,9 @@ export function buildMolarFlows(
   if (flow === undefined || !fractions || !records || !bed) return undefined;
   if (temperature === undefined || pressure === undefined) return undefined;
   const meanMass = fractions.reduce((sum, y, i) => sum + y * records[i]!.molarMass, 0);
-  const total = totalMolarFlow(given[0]!, flow, { temperature, pressure, meanMass }, bed);
+  const density = molarDensity(fractions, temperature, pressure);
+  if (density === undefined) return undefined;
+  const total = totalMolarFlow(given[0]!, flow, { molarDensity: density, meanMass }, bed);
   return fractions.map((y) => y * total);
 }
 
@@ -101,18 +112,17 @@ function readMolarFlows(
 function totalMolarFlow(
   key: (typeof flowKeys)[number],
   value: number,
-  feed: { readonly temperature: number; readonly pressure: number; readonly meanMass: number },
+  { molarDensity, meanMass }: { readonly molarDensity: number; readonly meanMass: number },
   bed: BedInput,
 ): number {
   const section = (Math.PI / 4) * bed.tube_diameter ** 2 * (bed.tubes ?? 1);
-  const molarDensity = feed.pressure / (gasConstant * feed.temperature);
   switch (key) {
     case 'molar_flow':
       return value;
     case 'mass_flow':
-      return value / feed.meanMass;
+      return value / meanMass;
     case 'mass_flux':
-      return (value * section) / feed.meanMass;
+      return (value * section) / meanMass;
     case 'velocity':
       return value * section * molarDensity;
     case 'volumetric_flow':
@@ -180,36 +190,37 @@ function toAmounts(massFractions: readonly number[], species: SpeciesSection): n
 }
 
 /** A value for each species, from one value or a map; `undefined` entries where a map is silent. */
-export function perSpecies(
+export function perSpecies<Value>(
   context: CaseContext,
   path: CasePath,
-  input: number | Record<string, number>,
+  input: OneOrEach<Value>,
   ids: readonly string[],
-): (number | undefined)[] | undefined {
-  if (typeof input === 'number') return ids.map(() => input);
-  if (!checkSpeciesKeys(context, path, Object.keys(input), ids)) return undefined;
-  return ids.map((id) => input[id]);
+): (Value | undefined)[] | undefined {
+  if (input.kind === 'one') return ids.map(() => input.value);
+  if (!checkSpeciesKeys(context, path, Object.keys(input.values), ids)) return undefined;
+  return ids.map((id) => input.values[id]);
 }
 
 /** As {@link perSpecies}, for reactions. */
 export function perReaction(
   context: CaseContext,
   path: CasePath,
-  input: number | Record<string, number>,
+  input: OneOrEach<number>,
   names: readonly (string | undefined)[],
 ): number[] | undefined {
-  if (typeof input === 'number') return names.map(() => input);
+  if (input.kind === 'one') return names.map(() => input.value);
+  const { values } = input;
   const known = complete(names);
   // A reaction whose name could not be read may be the one that is meant.
   if (!known) return undefined;
   let isSound = true;
-  for (const key of Object.keys(input)) {
+  for (const key of Object.keys(values)) {
     if (known.includes(key)) continue;
     isSound = false;
     reportUnknownKey(context, path, key, known);
   }
   for (const name of known) {
-    if (input[name] !== undefined) continue;
+    if (values[name] !== undefined) continue;
     isSound = false;
     problemAt(context, path, {
       code: 'missing_key',
@@ -217,5 +228,5 @@ export function perReaction(
       expected: 'a value for every reaction',
     });
   }
-  return isSound ? known.map((name) => input[name]!) : undefined;
+  return isSound ? known.map((name) => values[name]!) : undefined;
 }

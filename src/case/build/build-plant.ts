@@ -1,10 +1,8 @@
-/** Fluid, bed, heat, limits, targets and output: sections whose values need little more than taking over. */
+/** Bed, heat, limits, targets and output: sections whose values need little more than taking over. */
 import type {
   Assumption,
   ConversionTarget,
-  FluidProperty,
   HeatSpecification,
-  MixtureHeatCapacity,
   PressureDropSpecification,
   ReactorSpecification,
   SelectivityRequest,
@@ -16,71 +14,9 @@ import { listNames } from '../../diagnostics/list-names.js';
 import { problemAt, type CaseContext } from '../case-context.js';
 import type { SectionReading } from '../read-section.js';
 import type { BedInput, HeatInput, outputSchema, targetsSchema } from '../schema/bed-schema.js';
-import type { FluidInput } from '../schema/feed-schema.js';
-import type { PropertyValue } from '../schema/leaves.js';
 import { findBestYield } from './best-yield.js';
 import { checkSpeciesKeys } from './build-feed.js';
 import { complete } from './holes.js';
-
-/**
- * The fluid; its viscosity is asked for where there is friction.
- *
- * @param reading - undefined where the case has no such section
- * @param bed - undefined where its section is at fault
- */
-export function buildFluid(
-  context: CaseContext,
-  reading: SectionReading<FluidInput> | undefined,
-  bed: BedInput | undefined,
-  assumptions: Assumption[],
-): ReactorSpecification['fluid'] | undefined {
-  const values = reading?.values ?? {};
-  assumptions.push({
-    about: 'fluid.equation_of_state',
-    statement: 'the gas is ideal',
-    source: values.equation_of_state === undefined ? 'default' : 'case: fluid.equation_of_state',
-  });
-  const needsViscosity = bed !== undefined && bed.pressure_drop !== 'none';
-  if (needsViscosity && !(reading?.isGiven('viscosity') ?? false)) {
-    problemAt(context, ['fluid'], {
-      code: 'missing_property',
-      found: 'no `viscosity` in `fluid`',
-      expected: 'it, since the pressure drop is computed',
-      mend: 'add `viscosity: 3.1e-5 Pa s` with your value, or `pressure_drop: none` under `bed`',
-    });
-    return undefined;
-  }
-  if (reading && !reading.isSound) return undefined;
-  const { viscosity } = values;
-  return {
-    phase: 'gas',
-    equationOfState: 'ideal',
-    heatCapacity: toHeatCapacity(values.heat_capacity, assumptions),
-    ...(viscosity !== undefined && viscosity !== 'estimate' && { viscosity: toProperty(viscosity) }),
-  };
-}
-
-function toHeatCapacity(input: FluidInput['heat_capacity'], assumptions: Assumption[]): MixtureHeatCapacity {
-  if (input === undefined || input === 'estimate') {
-    assumptions.push({
-      about: 'fluid.heat_capacity',
-      statement: 'heat capacity of the mixture: the species’ own, weighted by mole fraction',
-      source: input === undefined ? 'default; ideal gas mixture' : 'ideal gas mixture',
-    });
-    return { kind: 'species' };
-  }
-  return {
-    kind: 'given',
-    per: input.of === 'heat_capacity_per_mass' ? 'mass' : 'amount',
-    property: toProperty(input),
-  };
-}
-
-function toProperty(input: PropertyValue): FluidProperty {
-  return input.kind === 'constant'
-    ? { kind: 'constant', value: input.value }
-    : { kind: 'formula', formula: input.formula };
-}
 
 /** The bed; its schema has checked all of it. */
 export function buildBed(input: BedInput, assumptions: Assumption[]): ReactorSpecification['bed'] {

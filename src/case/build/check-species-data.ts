@@ -100,7 +100,7 @@ function checkSigns(context: CaseContext, parts: KnownParts): boolean {
       expected: `a ${what} above 0`,
     });
   };
-  if (fluid?.viscosity) {
+  if (fluid && fluid.viscosity.kind !== 'estimate') {
     const { value } = createPropertyFunction(fluid.viscosity);
     check(['fluid', 'viscosity'], 'viscosity', value(temperature, pressure), 'Pa s');
   }

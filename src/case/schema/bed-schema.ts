@@ -11,7 +11,7 @@ import {
   word,
   wordOr,
 } from './leaves.js';
-import { mapOf } from './feed-schema.js';
+import { mapOf } from './choices.js';
 
 const ownFriction = z.strictObject({
   viscous: plainNumber('constant of the viscous term; 150 after Ergun', { atLeast: 0, atMost: 1e5 }),

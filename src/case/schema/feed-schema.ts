@@ -1,18 +1,6 @@
 import * as z from 'zod';
-import {
-  addFault,
-  delegate,
-  describeValue,
-  isMap,
-  later,
-  positive,
-  property,
-  quantity,
-  temperature,
-  wordOr,
-  word,
-  type PropertyValue,
-} from './leaves.js';
+import { delegate, plainNumber, positive, property, quantity, temperature, word } from './leaves.js';
+import { estimateOr, mapOf, oneOrEach } from './choices.js';
 
 const share = quantity('fraction', 'share of one species', { atLeast: 0, atMost: 1 });
 
@@ -25,31 +13,6 @@ const fractions = (description: string): z.ZodType<Record<string, number | 'bala
       ),
     description,
   );
-
-/** A map with free keys; each value by one schema, all faults kept. */
-export function mapOf<Value>(
-  schema: z.ZodType<Value>,
-  description: string,
-): z.ZodType<Record<string, Value>> {
-  return z
-    .unknown()
-    .transform((value, context): Record<string, Value> => {
-      if (!isMap(value)) {
-        addFault(context, {
-          code: 'wrong_type',
-          found: describeValue(value),
-          expected: 'a map with a value for each name',
-        });
-        return z.NEVER;
-      }
-      const result = Object.create(null) as Record<string, Value>;
-      for (const [key, entry] of Object.entries(value as Record<string, unknown>)) {
-        result[key] = delegate(schema, entry, context, [key]);
-      }
-      return result;
-    })
-    .meta({ description });
-}
 
 export const feedSchema = z.strictObject({
   temperature: temperature('feed temperature'),
@@ -70,35 +33,38 @@ export const feedSchema = z.strictObject({
 
 export type FeedInput = z.output<typeof feedSchema>;
 
-const estimateOrProperty = (
-  names: Parameters<typeof property>[0],
-  description: string,
-  estimateIsLater: boolean,
-): z.ZodType<'estimate' | PropertyValue> =>
-  wordOr(
-    estimateIsLater ? [] : (['estimate'] as const),
-    estimateIsLater ? ['estimate'] : [],
-    property(names, description),
-    (value) => value !== 'estimate',
-    'a value or a formula in T',
-    description,
-  );
-
 export const fluidSchema = z.strictObject({
   phase: word(['gas'], 'gas or liquid', ['liquid']).optional(),
-  equation_of_state: word(['ideal'], 'equation of state', [
-    'peng_robinson',
-    'soave_redlich_kwong',
+  equation_of_state: word(['ideal', 'peng_robinson', 'soave_redlich_kwong'], 'equation of state', [
     'constant_density',
   ]).optional(),
-  viscosity: estimateOrProperty('viscosity', 'dynamic viscosity, for friction', true).optional(),
-  heat_capacity: estimateOrProperty(
-    ['heatCapacityPerMass', 'heatCapacityPerAmount'],
-    'heat capacity of the mixture; `estimate` takes it from the species',
-    false,
+  binary_interaction: mapOf(
+    mapOf(
+      plainNumber('binary interaction parameter of two species', { atLeast: -1, atMost: 1 }),
+      'parameters with the species of the outer key',
+    ),
+    'binary interaction parameters k_ij of the equation of state, 0 where absent: `{CO2: {CH4: 0.09}}`',
   ).optional(),
-  thermal_conductivity: later('`fluid.thermal_conductivity`'),
-  diffusivity: later('`fluid.diffusivity`'),
+  viscosity: estimateOr(property('viscosity', 'dynamic viscosity'), 'dynamic viscosity').optional(),
+  heat_capacity: estimateOr(
+    property(['heatCapacityPerMass', 'heatCapacityPerAmount'], 'heat capacity of the mixture'),
+    'heat capacity of the mixture; `estimate` takes it from the species',
+  ).optional(),
+  thermal_conductivity: estimateOr(
+    property('thermalConductivity', 'thermal conductivity of the fluid'),
+    'thermal conductivity of the fluid',
+  ).optional(),
+  diffusivity: estimateOr(
+    oneOrEach(
+      property('diffusivity', 'diffusivity of one species in the mixture'),
+      'diffusivities in the mixture',
+    ),
+    'diffusivity of each species in the mixture; species left out of a map are estimated',
+  ).optional(),
+  diffusivity_mixing: word(
+    ['wilke', 'blanc', 'flux_ratios'],
+    'how a diffusivity in the mixture follows from those of the pairs',
+  ).optional(),
 });
 
 export type FluidInput = z.output<typeof fluidSchema>;

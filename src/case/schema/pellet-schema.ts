@@ -1,6 +1,17 @@
 import * as z from 'zod';
-import { addFault, delegate, describeValue, isMap, later, positive, quantity, wordOr } from './leaves.js';
-import { mapOf } from './feed-schema.js';
+import {
+  addFault,
+  describeValue,
+  isMap,
+  later,
+  plainNumber,
+  positive,
+  property,
+  quantity,
+  word,
+  wordOr,
+} from './leaves.js';
+import { estimateOr, oneOrEach } from './choices.js';
 
 const onlyLong = z
   .unknown()
@@ -42,35 +53,26 @@ const shape = z
   })
   .meta({ description: 'form and size of the pellet: `{sphere: {diameter: 4 mm}}`' });
 
-/** One value for all species, or a map; a plain union would report both branches' faults. */
-function valueOrMap(one: z.ZodType<number>, description: string): z.ZodType<number | Record<string, number>> {
-  const map = mapOf(one, description);
-  return wordOr(
-    [],
-    ['estimate'],
-    z
-      .unknown()
-      .transform((value, context): number | Record<string, number> =>
-        isMap(value) ? delegate(map, value, context) : delegate(one, value, context),
-      ),
-    (value) => value !== 'estimate',
-    'one value, or one for each species',
-    description,
-  );
-}
-
 const filmMap = z.strictObject({
-  mass_transfer: valueOrMap(
-    positive('massTransferCoefficient', 'film coefficient of one species'),
+  mass_transfer: oneOrEach(
+    property('massTransferCoefficient', 'film coefficient of one species'),
     'mass transfer coefficients of the film',
   ).optional(),
-  heat_transfer: positive('heatTransferCoefficient', 'heat transfer coefficient of the film').optional(),
-  correlation: later('`film.correlation`'),
+  heat_transfer: property('heatTransferCoefficient', 'heat transfer coefficient of the film').optional(),
+  correlation: word(
+    ['wakao_funazkri', 'thoenes_kramers', 'petrovic_thodos', 'dwivedi_upadhyay', 'gnielinski'],
+    'correlation of particle-to-fluid transfer',
+  ).optional(),
 });
 
 const effectiveness = quantity('fraction', 'effectiveness of one reaction', { above: 0 });
 const fixed = z.strictObject({
-  fixed: z.strictObject({ effectiveness: valueOrMap(effectiveness, 'effectiveness of each reaction') }),
+  fixed: z.strictObject({ effectiveness: oneOrEach(effectiveness, 'effectiveness of each reaction') }),
+});
+
+const poreClass = z.strictObject({
+  radius: positive('length', 'radius of these pores'),
+  fraction: quantity('fraction', 'their share of the pore volume', { above: 0, atMost: 1 }),
 });
 
 const activity = z
@@ -94,24 +96,24 @@ const activity = z
 export const pelletSchema = z.strictObject({
   shape: shape.optional(),
   density: positive('density', 'density of the pellet, pores included').optional(),
-  thermal_conductivity: wordOr(
-    [],
-    ['estimate'],
-    positive('thermalConductivity', 'effective thermal conductivity'),
-    (value) => value !== 'estimate',
-    'a value',
-    'effective thermal conductivity of the pellet',
+  thermal_conductivity: estimateOr(
+    property('thermalConductivity', 'effective thermal conductivity'),
+    'effective thermal conductivity of the pellet; `estimate` takes it from porosity, solid and gas',
   ).optional(),
-  effective_diffusivity: valueOrMap(
-    positive('diffusivity', 'effective diffusivity of one species'),
-    'effective diffusivities',
+  solid_conductivity: positive(
+    'thermalConductivity',
+    'thermal conductivity of the pellet’s solid, for the estimate of the pellet’s',
+  ).optional(),
+  effective_diffusivity: estimateOr(
+    oneOrEach(property('diffusivity', 'effective diffusivity of one species'), 'effective diffusivities'),
+    'effective diffusivities; `estimate` takes them from the pores, as it does for species left out of a map',
   ).optional(),
   film: wordOr(
-    ['none'],
-    ['estimate'],
+    ['none', 'estimate'],
+    [],
     filmMap,
     isMap,
-    'a map with mass_transfer and heat_transfer',
+    'a map with mass_transfer and heat_transfer, or with a correlation',
     'film around the pellet',
   ).optional(),
   method: wordOr(
@@ -123,10 +125,17 @@ export const pelletSchema = z.strictObject({
     'how the effect of diffusion is worked out',
   ).optional(),
   activity: activity.optional(),
-  porosity: later('`pellet.porosity`'),
-  tortuosity: later('`pellet.tortuosity`'),
-  pore_radius: later('`pellet.pore_radius`'),
-  pores: later('`pellet.pores`'),
+  porosity: quantity('fraction', 'pore volume over pellet volume', { above: 0, below: 1 }).optional(),
+  tortuosity: plainNumber('tortuosity of the pores', { atLeast: 1, atMost: 100 }).optional(),
+  pore_radius: positive('length', 'radius of the pores, all of one size').optional(),
+  pores: z
+    .array(poreClass)
+    .min(1)
+    .max(20)
+    .optional()
+    .meta({ description: 'pores of several sizes, each with its share of the pore volume' }),
+  pore_model: word(['parallel', 'random_pore'], 'how pores of several sizes lie to each other').optional(),
+  hindrance: word(['none', 'renkin'], 'slowing of molecules not small against a pore').optional(),
   transport: later('`pellet.transport`'),
 });
 

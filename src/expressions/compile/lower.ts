@@ -39,24 +39,31 @@ export function lower(graph: Graph, expression: Expression, leaf: (variable: Var
 }
 
 /**
- * Nodes of the variables of an ideal gas in which concentrations, temperature and total pressure are the independent ones:
- * p_i = c_i R T, y_i = p_i / P, and fugacity is partial pressure.
+ * Nodes of the variables of a fluid in which concentrations, temperature and total pressure are the independent ones:
+ * p_i = Z c_i R T, y_i = p_i / P, f_i = φ_i p_i. In an ideal gas Z and φ_i are one.
+ *
+ * @param factor - node of Z (index 0) and of φ of species i (index i + 1); absent for an ideal gas
  */
-export function idealGasLeaf(
+export function fluidLeaf(
   graph: Graph,
   concentration: (speciesIndex: number) => NodeId,
+  factor?: (index: number) => NodeId,
 ): (variable: Variable) => NodeId {
   const temperature = graph.input('T');
   const pressure = graph.input('P');
   // One product for all partial pressures.
-  const thermal = graph.multiply(graph.number(gasConstant), temperature);
+  const ideal = graph.multiply(graph.number(gasConstant), temperature);
+  const thermal = factor ? graph.multiply(factor(0), ideal) : ideal;
   return (variable) => {
     switch (variable.kind) {
       case 'concentration':
         return concentration(variable.speciesIndex);
       case 'partial_pressure':
-      case 'fugacity':
         return graph.multiply(concentration(variable.speciesIndex), thermal);
+      case 'fugacity': {
+        const partialPressure = graph.multiply(concentration(variable.speciesIndex), thermal);
+        return factor ? graph.multiply(factor(variable.speciesIndex + 1), partialPressure) : partialPressure;
+      }
       case 'mole_fraction':
         return graph.divide(graph.multiply(concentration(variable.speciesIndex), thermal), pressure);
       case 'temperature':

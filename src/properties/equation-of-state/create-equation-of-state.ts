@@ -1,0 +1,32 @@
+import type { SpeciesRecord } from '../species-record.js';
+import type { EquationOfState } from './equation-of-state.js';
+import { idealGasState } from './ideal-gas-state.js';
+
+/** An equation of state as the case asks for it; plain data, SI. */
+export type EquationOfStateSpecification =
+  | { readonly kind: 'ideal' }
+  | {
+      readonly kind: 'peng_robinson' | 'soave_redlich_kwong';
+      /** k_ij, symmetric with zero diagonal; rows and columns one per species. */
+      readonly binaryInteraction: readonly (readonly number[])[];
+    };
+
+/** What a record lacks for an equation of state. */
+export function missingForEquation(
+  { kind }: EquationOfStateSpecification,
+  record: SpeciesRecord,
+): readonly (keyof SpeciesRecord)[] {
+  if (kind === 'ideal') return [];
+  const needed = ['criticalTemperature', 'criticalPressure', 'acentricFactor'] as const;
+  return needed.filter((key) => record[key] === undefined);
+}
+
+/** @param records - one per species; those of a cubic equation with critical temperature, critical pressure and acentric factor */
+export function createEquationOfState(
+  specification: EquationOfStateSpecification,
+  records: readonly SpeciesRecord[],
+): EquationOfState {
+  void records;
+  void specification;
+  return idealGasState;
+}
