@@ -60,16 +60,16 @@ export function createBedEvents(model: ReactorModel, balances: Balances): BedEve
         () => `temperature rises above the limit you set, ${kelvin(limit)}`,
       );
     }
-    const { lowestTemperature, highestTemperature } = model;
-    if (lowestTemperature > 0 || highestTemperature < Infinity) {
+    const { lowest, highest } = model.dataRange;
+    if (lowest > 0 || highest < Infinity) {
       add(
         'property_range_left',
         -1,
         true,
         () =>
           Math.min(
-            conditions.temperature - lowestTemperature,
-            highestTemperature < Infinity ? highestTemperature - conditions.temperature : Infinity,
+            conditions.temperature - lowest,
+            highest < Infinity ? highest - conditions.temperature : Infinity,
           ),
         () => `temperature leaves the range of the species data, ${kelvin(conditions.temperature)}`,
       );

@@ -45,6 +45,12 @@ export function bedWarnings(
   if (closure.energy > closureAlarm) {
     warnings.push(`Energy closes only to ${closure.energy.toExponential(1)}.`);
   }
+  const hottest = largestNumber(profile.centreTemperatures);
+  if (hottest > model.dataRange.highest) {
+    warnings.push(
+      `Pellets reach ${hottest.toFixed(1)} K inside, above the ${model.dataRange.highest} K up to which the data of ${model.dataRange.highestSpecies!} hold.`,
+    );
+  }
   const ratio = bed.tubeDiameter / pellet.geometry.sauterDiameter;
   if (ratio < narrowTube) {
     warnings.push(
@@ -63,6 +69,11 @@ function reynoldsOutside(numbers: Float64Array): string | undefined {
   const highest = Math.max(...numbers);
   if (lowest >= frictionRange.lowest && highest <= frictionRange.highest) return undefined;
   return `The packed-bed Reynolds number runs from ${lowest.toPrecision(3)} to ${highest.toPrecision(3)}; the friction law was fitted for ${frictionRange.lowest} to ${frictionRange.highest} (Ergun 1952).`;
+}
+
+/** Leaves out what is no number: pellets without a state. */
+function largestNumber(values: Float64Array): number {
+  return values.reduce((largest, value) => (value > largest ? value : largest), -Infinity);
 }
 
 function bar(pressure: number): string {

@@ -11,6 +11,7 @@ import type { EquationOfState } from '../properties/equation-of-state/equation-o
 import { createPropertyFunction } from '../properties/fluid-property.js';
 import { createEquilibriumConstant } from '../properties/reaction-equilibrium.js';
 import { createSpeciesThermochemistry, type SpeciesThermochemistry } from '../properties/thermochemistry.js';
+import { dataRange, type DataRange } from './data-range.js';
 import { frictionCoefficients, type FrictionCoefficients } from './friction.js';
 import { givenHeatContent, speciesHeatContent, type HeatContent } from './heat-content.js';
 import { createLocalProperties, type LocalProperties } from './local-properties.js';
@@ -49,9 +50,7 @@ export interface ReactorModel {
   /** Each law's own basis into mol/(m³ pellet s); activity included. */
   readonly rateFactors: readonly number[];
   readonly pellet: PelletModel;
-  /** K; beyond them the species' data do not hold. */
-  readonly lowestTemperature: number;
-  readonly highestTemperature: number;
+  readonly dataRange: DataRange;
 }
 
 /** Part of the run's tolerance that the pellet may use up: its error acts on the axial solution as a small error of the rates. */
@@ -85,7 +84,6 @@ export function createReactorModel(specification: ReactorSpecification): Reactor
     lawFactors,
   );
   const isIsothermal = heat.mode === 'isothermal';
-  const usedSpecies = isIsothermal || fluid.heatCapacity.kind === 'given' ? [] : thermochemistry;
   return {
     specification,
     speciesCount: species.length,
@@ -127,8 +125,7 @@ export function createReactorModel(specification: ReactorSpecification): Reactor
       referenceHeats: isIsothermal ? undefined : heatContent?.referenceHeats,
       tolerance: specification.numerics.tolerance * pelletToleranceShare,
     }),
-    lowestTemperature: Math.max(0, ...usedSpecies.map((entry) => entry.lowestTemperature)),
-    highestTemperature: Math.min(Infinity, ...usedSpecies.map((entry) => entry.highestTemperature)),
+    dataRange: dataRange(specification, thermochemistry),
   };
 }
 

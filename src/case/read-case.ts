@@ -13,6 +13,7 @@ import { buildBed, buildHeat, buildOutput, buildTargets } from './build/build-pl
 import { readConstants } from './build/build-constants.js';
 import { buildReactions } from './build/build-reactions.js';
 import { buildSpecies } from './build/build-species.js';
+import { checkDataRange } from './build/check-data-range.js';
 import { checkEquilibrium } from './build/check-equilibrium.js';
 import { checkSpeciesData } from './build/check-species-data.js';
 import { complete } from './build/holes.js';
@@ -165,7 +166,8 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
     numerics: { tolerance: numerics.tolerance ?? defaultTolerance },
     assumptions,
   };
-  return checkEquilibrium(context, specification) ? specification : undefined;
+  const isInRange = checkDataRange(context, specification);
+  return checkEquilibrium(context, specification) && isInRange ? specification : undefined;
 }
 
 function checkKeys(context: CaseContext): void {

@@ -3,7 +3,7 @@
  * species' thermochemistry says that the reaction stops.
  */
 import type { ReactorSpecification } from '../../bed/reactor-specification.js';
-import type { Expression } from '../../expressions/expression.js';
+import { mentions } from '../../expressions/mentions.js';
 import { compileRates } from '../../kinetics/compile-rates.js';
 import { findRoot } from '../../numerics/scalar-root.js';
 import { createEquilibriumConstant, hasEquilibriumConstant } from '../../properties/reaction-equilibrium.js';
@@ -21,7 +21,7 @@ export function checkEquilibrium(context: CaseContext, specification: ReactorSpe
   let isSound = true;
   reactions.forEach((reaction, index) => {
     const isKnown = hasEquilibriumConstant(reaction.stoichiometry, thermochemistry);
-    if (usesEquilibriumConstant(reaction.rate.expression) && !isKnown) {
+    if (mentions(reaction.rate.expression, 'equilibrium_constant') && !isKnown) {
       isSound = false;
       problemAt(context, ['reactions', index, 'rate'], {
         code: 'missing_property',
@@ -33,20 +33,6 @@ export function checkEquilibrium(context: CaseContext, specification: ReactorSpe
     if (reaction.isReversible && isKnown && isSound) compareWithLaw(context, specification, index);
   });
   return isSound;
-}
-
-function usesEquilibriumConstant(expression: Expression): boolean {
-  switch (expression.kind) {
-    case 'number':
-      return false;
-    case 'variable':
-      return expression.variable.kind === 'equilibrium_constant';
-    case 'negate':
-    case 'unary':
-      return usesEquilibriumConstant(expression.operand);
-    case 'binary':
-      return usesEquilibriumConstant(expression.left) || usesEquilibriumConstant(expression.right);
-  }
 }
 
 /**
