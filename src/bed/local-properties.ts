@@ -8,8 +8,12 @@ import type { BedConditions } from './bed-conditions.js';
 import type { ReactorSpecification } from './reactor-specification.js';
 
 export interface LocalProperties {
-  /** Pa s; NaN where nothing needs it. */
+  /** Pa s; NaN where nothing needs it, like the next two. */
   viscosity: number;
+  /** W/(m K) */
+  thermalConductivity: number;
+  /** m²/s, of each species in the mixture. */
+  readonly diffusivities: Float64Array;
   /** Pa s/K and Pa s/Pa at constant composition, set by `differentiateViscosity`. */
   viscosityByTemperature: number;
   viscosityByPressure: number;
@@ -62,6 +66,8 @@ export function createLocalProperties(specification: ReactorSpecification): Loca
 
   const properties: LocalProperties = {
     viscosity: Number.NaN,
+    thermalConductivity: Number.NaN,
+    diffusivities: new Float64Array(species.length).fill(Number.NaN),
     viscosityByTemperature: 0,
     viscosityByPressure: 0,
     transport,

@@ -27,6 +27,12 @@ export interface Profile {
   readonly pressures: Float64Array;
   /** K; absent where nothing is cooled. */
   readonly coolantTemperatures?: Float64Array;
+  /** kg/m³, bulk fluid */
+  readonly densities: Float64Array;
+  /** P v / (R T); absent for an ideal gas. */
+  readonly compressibilityFactors?: Float64Array;
+  /** Pa s; absent where nothing needs it. */
+  readonly viscosities?: Float64Array;
   /** mol/s, whole reactor; one column per species. */
   readonly molarFlows: readonly Float64Array[];
   readonly moleFractions: readonly Float64Array[];
@@ -38,6 +44,50 @@ export interface Profile {
   readonly surfaceTemperatures: Float64Array;
   /** K */
   readonly centreTemperatures: Float64Array;
+  /** Reactions with a direction that equilibrium sets: those written as reversible whose constant follows from the species' data. */
+  readonly equilibrium: readonly ReactionApproach[];
+  /** What conversions would be if all those reactions came to equilibrium at the temperature and pressure of the position. */
+  readonly equilibriumConversions: readonly EquilibriumConversion[];
+}
+
+/** How near one reaction is to its equilibrium along the bed. */
+export interface ReactionApproach {
+  readonly reactionIndex: number;
+  /** Reaction quotient over equilibrium constant: 0 far from equilibrium, 1 at it; NaN where neither is a number. */
+  readonly quotientRatios: Float64Array;
+  /** K, temperature of the gas less that at which its composition would be at equilibrium; NaN where there is none. */
+  readonly temperatureApproaches: Float64Array;
+}
+
+export interface EquilibriumConversion {
+  readonly speciesIndex: number;
+  readonly values: Float64Array;
+}
+
+/** Properties of the fluid, the film and the pellet at one position; SI, `null` where nothing needs a property. */
+export interface TransportReport {
+  readonly label: 'inlet' | 'outlet';
+  /** m from the inlet */
+  readonly position: number;
+  readonly density: number;
+  readonly compressibilityFactor: number;
+  readonly viscosity: number | null;
+  readonly thermalConductivity: number | null;
+  /** W/(m K) and W/(m² K) */
+  readonly pelletConductivity: number | null;
+  readonly filmHeatTransfer: number | null;
+  /** One per species that takes part in a reaction. */
+  readonly species: readonly SpeciesTransport[];
+}
+
+export interface SpeciesTransport {
+  readonly speciesIndex: number;
+  /** m²/s, in the mixture */
+  readonly diffusivity: number | null;
+  readonly effectiveDiffusivity: number | null;
+  /** m/s */
+  readonly filmMassTransfer: number | null;
+  readonly fugacityCoefficient: number;
 }
 
 /** Inside of one pellet, from the centre to the surface; SI. */
@@ -98,6 +148,7 @@ export interface RunResult {
   readonly reactionNames: readonly string[];
   readonly profile: Profile;
   readonly pellets: readonly PelletProfile[];
+  readonly transport: readonly TransportReport[];
   readonly outlet: {
     /** m; the bed's length, or where the run stopped. */
     readonly position: number;

@@ -9,6 +9,7 @@ import { createReactorModel, type ReactorModel } from './reactor-model.js';
 import type { ReactorSpecification } from './reactor-specification.js';
 import type { EffectivenessSummary, PelletProfile, RunEvent, RunResult, RunStop } from './run-result.js';
 import { stopMessages } from './stop-messages.js';
+import { transportReport } from './transport-report.js';
 import { pelletProfile, tabulate, type BedStates, type Tabulation } from './tabulate.js';
 
 /**
@@ -60,6 +61,10 @@ export function solveReactor(specification: ReactorSpecification): RunResult {
     reactionNames: specification.reactions.map(({ name }) => name),
     profile: tabulation.profile,
     pellets,
+    transport: [
+      ...transportReport('inlet', 0, balances.initialState, model, balances),
+      ...transportReport('outlet', integration.position, integration.state, model, balances),
+    ],
     outlet,
     conversions: conversionsOf(model, outlet.molarFlows),
     selectivities: selectivitiesOf(model, outlet.molarFlows),

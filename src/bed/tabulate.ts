@@ -1,4 +1,5 @@
 import type { PelletModel } from '../pellet/pellet-model.js';
+import { gasConstant } from '../quantities/constants.js';
 import type { Balances } from './balances.js';
 import type { ReactorModel } from './reactor-model.js';
 import type { PelletProfile, Profile } from './run-result.js';
@@ -47,6 +48,9 @@ export function tabulate(
   const columns = (count: number): Float64Array[] => Array.from({ length: count }, column);
   const temperatures = column();
   const pressures = column();
+  const densities = column();
+  const compressibilityFactors = column();
+  const viscosities = column();
   const surfaceTemperatures = column();
   const centreTemperatures = column();
   const molarFlows = columns(speciesCount);
@@ -67,6 +71,11 @@ export function tabulate(
     const isSolved = isKnown && model.pellet.solve(conditions) === 'converged';
     temperatures[row] = conditions.temperature;
     pressures[row] = conditions.pressure;
+    const { molarVolume } = conditions.fluid;
+    densities[row] = model.massFlow / (conditions.totalFlow * molarVolume);
+    compressibilityFactors[row] =
+      (conditions.pressure * molarVolume) / (gasConstant * conditions.temperature);
+    viscosities[row] = model.localProperties.viscosity;
     reynoldsNumbers[row] = reynoldsFlux / model.localProperties.viscosity;
     surfaceTemperatures[row] = isSolved ? model.pellet.surfaceTemperature() : Number.NaN;
     centreTemperatures[row] = isSolved ? model.pellet.centreTemperature() : Number.NaN;
@@ -101,12 +110,17 @@ export function tabulate(
       temperatures,
       pressures,
       ...(heat.mode === 'cooled' && { coolantTemperatures: column().fill(heat.coolantTemperature) }),
+      densities,
+      ...(!model.equationOfState.isIdealGas && { compressibilityFactors }),
+      ...(viscosities.every(Number.isFinite) && { viscosities }),
       molarFlows,
       moleFractions,
       rates,
       effectiveness,
       surfaceTemperatures,
       centreTemperatures,
+      equilibrium: [],
+      equilibriumConversions: [],
     },
     bulkRates,
     averageRates,

@@ -34,6 +34,19 @@ export function profileCsv({ profile, speciesIds, reactionNames }: RunResult): s
     ...reactionNames.map((name, j) => ({ header: `eta_${name}`, values: profile.effectiveness[j]! })),
     { header: 'pellet_T_surface_K', values: profile.surfaceTemperatures },
     { header: 'pellet_T_center_K', values: profile.centreTemperatures },
+    { header: 'density_kg_m3', values: profile.densities },
+    ...(profile.compressibilityFactors
+      ? [{ header: 'compressibility_factor', values: profile.compressibilityFactors }]
+      : []),
+    ...(profile.viscosities ? [{ header: 'viscosity_Pa_s', values: profile.viscosities }] : []),
+    ...profile.equilibrium.flatMap(({ reactionIndex, quotientRatios, temperatureApproaches }) => [
+      { header: `quotient_over_K_${reactionNames[reactionIndex]!}`, values: quotientRatios },
+      { header: `approach_${reactionNames[reactionIndex]!}_K`, values: temperatureApproaches },
+    ]),
+    ...profile.equilibriumConversions.map(({ speciesIndex, values }) => ({
+      header: `equilibrium_conversion_${speciesIds[speciesIndex]!}`,
+      values,
+    })),
   ]);
 }
 

@@ -16,8 +16,19 @@ export const inventedResult: RunResult = {
     moleFractions: [Float64Array.of(1, 2 / 3, 1 / 3), Float64Array.of(0, 1 / 3, 2 / 3)],
     rates: [Float64Array.of(1e-7, 1e-6, 123e-9), Float64Array.of(0, -4.2e-5, 0)],
     effectiveness: [Float64Array.of(0.5, 0.4, 0.6), Float64Array.of(NaN, 1.25, Infinity)],
+    densities: Float64Array.of(0.9, 0.85, NaN),
     surfaceTemperatures: Float64Array.of(601, 613, 602),
     centreTemperatures: Float64Array.of(602, 614, 603),
+    compressibilityFactors: Float64Array.of(0.97, 0.98, 0.99),
+    viscosities: Float64Array.of(3e-5, 3.1e-5, 3.05e-5),
+    equilibrium: [
+      {
+        reactionIndex: 1,
+        quotientRatios: Float64Array.of(0, 0.12, 0.98),
+        temperatureApproaches: Float64Array.of(NaN, -80, -2),
+      },
+    ],
+    equilibriumConversions: [{ speciesIndex: 0, values: Float64Array.of(0.91, 0.87, 0.9) }],
   },
   pellets: [
     {
@@ -39,6 +50,7 @@ export const inventedResult: RunResult = {
       bulkTemperature: 601,
     },
   ],
+  transport: [],
   outlet: {
     position: 1,
     temperature: 601,

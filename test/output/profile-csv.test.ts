@@ -33,7 +33,7 @@ function parseStrictly(text: string): string[][] {
 }
 
 const expectedHeader =
-  'z_m,T_K,P_Pa,coolant_T_K,F_A_mol_s,F_B_2_mol_s,y_A,y_B_2,rate_first_mol_kg_s,rate_second_mol_kg_s,eta_first,eta_second,pellet_T_surface_K,pellet_T_center_K';
+  'z_m,T_K,P_Pa,coolant_T_K,F_A_mol_s,F_B_2_mol_s,y_A,y_B_2,rate_first_mol_kg_s,rate_second_mol_kg_s,eta_first,eta_second,pellet_T_surface_K,pellet_T_center_K,density_kg_m3,compressibility_factor,viscosity_Pa_s,quotient_over_K_second,approach_second_K,equilibrium_conversion_A';
 
 describe('profile.csv', () => {
   const { profile } = inventedResult;
@@ -63,6 +63,12 @@ describe('profile.csv', () => {
       ...profile.effectiveness,
       profile.surfaceTemperatures,
       profile.centreTemperatures,
+      profile.densities,
+      profile.compressibilityFactors!,
+      profile.viscosities!,
+      profile.equilibrium[0]!.quotientRatios,
+      profile.equilibrium[0]!.temperatureApproaches,
+      profile.equilibriumConversions[0]!.values,
     ];
     expect(rows).toHaveLength(profile.positions.length);
     rows.forEach((row, i) => {
