@@ -1,4 +1,5 @@
 import type { SpeciesRecord } from '../species-record.js';
+import { createCubicEquation } from './cubic-equation.js';
 import type { EquationOfState } from './equation-of-state.js';
 import { idealGasState } from './ideal-gas-state.js';
 
@@ -26,7 +27,6 @@ export function createEquationOfState(
   specification: EquationOfStateSpecification,
   records: readonly SpeciesRecord[],
 ): EquationOfState {
-  void records;
-  void specification;
-  return idealGasState;
+  if (specification.kind === 'ideal') return idealGasState;
+  return createCubicEquation(specification.kind, records, specification.binaryInteraction);
 }
