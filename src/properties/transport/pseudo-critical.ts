@@ -1,0 +1,65 @@
+import { gasConstant } from '../../quantities/constants.js';
+import type { SpeciesRecord } from '../species-record.js';
+import type { MissingFields } from './pure-gas-property.js';
+
+const fields = ['criticalTemperature', 'criticalPressure', 'criticalVolume'] as const;
+
+/** What the record lacks for corrections at pressure. */
+export function missingForPressureCorrection(record: SpeciesRecord): MissingFields {
+  return fields.filter((field) => record[field] === undefined);
+}
+
+/** Critical constants that a mixture acts as if it had; filled at each composition. */
+export interface PseudoCritical {
+  /** K */
+  temperature: number;
+  /** Pa */
+  pressure: number;
+  /** m³/mol */
+  volume: number;
+  /** Critical compressibility factor. */
+  compressibility: number;
+  /** kg/mol */
+  molarMass: number;
+}
+
+/**
+ * Mole-fraction means of critical temperature, volume and compressibility, and the pressure that follows from them.
+ *
+ * @source Lucas (1984), as in Poling, Prausnitz & O'Connell, The Properties of Gases and Liquids, 5th ed. (2001), sec. 9-7
+ */
+export function createPseudoCritical(
+  records: readonly SpeciesRecord[],
+): (moleFractions: Float64Array) => PseudoCritical {
+  const temperatures = Float64Array.from(records, ({ criticalTemperature }) => criticalTemperature!);
+  const volumes = Float64Array.from(records, ({ criticalVolume }) => criticalVolume!);
+  const factors = Float64Array.from(
+    records,
+    ({ criticalTemperature, criticalPressure, criticalVolume }) =>
+      (criticalPressure! * criticalVolume!) / (gasConstant * criticalTemperature!),
+  );
+  const masses = Float64Array.from(records, ({ molarMass }) => molarMass);
+  const mixture: PseudoCritical = {
+    temperature: 0,
+    pressure: 0,
+    volume: 0,
+    compressibility: 0,
+    molarMass: 0,
+  };
+  return (moleFractions) => {
+    let [temperature, volume, compressibility, molarMass] = [0, 0, 0, 0];
+    for (let i = 0; i < temperatures.length; i++) {
+      const y = moleFractions[i]!;
+      temperature += y * temperatures[i]!;
+      volume += y * volumes[i]!;
+      compressibility += y * factors[i]!;
+      molarMass += y * masses[i]!;
+    }
+    mixture.temperature = temperature;
+    mixture.volume = volume;
+    mixture.compressibility = compressibility;
+    mixture.molarMass = molarMass;
+    mixture.pressure = (compressibility * gasConstant * temperature) / volume;
+    return mixture;
+  };
+}
