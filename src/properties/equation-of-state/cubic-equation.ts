@@ -142,11 +142,7 @@ export function createCubicEquation(
         b += y * sizes[i]!;
       }
       const thermal = gasConstant * temperature;
-      const Z = largestCompressibility(
-        kind,
-        (a * pressure) / (thermal * thermal),
-        (b * pressure) / thermal,
-      );
+      const Z = largestCompressibility(kind, (a * pressure) / (thermal * thermal), (b * pressure) / thermal);
       const v = (Z * thermal) / pressure;
       const gap = v - b;
       if (!(gap > 0) || !(b > 0)) return false;
