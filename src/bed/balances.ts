@@ -77,6 +77,7 @@ export function createBalances(model: ReactorModel): Balances {
 
   const byTemperature = new Float64Array(size); // dT/dy
   const byPressure = new Float64Array(size); // dP/dy
+  const viscositySlopes = { byTemperature: 0, byPressure: 0 };
   const byVolume = new Float64Array(size); // d ln(volume flow)/dy
   const takeConditionSlopes = (): void => {
     const { pressure, totalFlow, fluid, capacityFlow, reactionHeats } = conditions;
@@ -104,7 +105,7 @@ export function createBalances(model: ReactorModel): Balances {
       }
       byVolume[v] = change;
     }
-    localProperties.differentiateViscosity(conditions);
+    if (pressureIndex >= 0) localProperties.viscositySlopesInto(conditions, viscositySlopes);
   };
 
   const evaluateJacobian = (position: number, state: Float64Array, jacobian: Float64Array): boolean => {
@@ -146,8 +147,7 @@ export function createBalances(model: ReactorModel): Balances {
         jacobian[pressureIndex * size + v] =
           slope * (byPressure[v]! / pressure + byVolume[v]!) +
           viscous *
-            (localProperties.viscosityByTemperature * byTemperature[v]! +
-              localProperties.viscosityByPressure * byPressure[v]!);
+            (viscositySlopes.byTemperature * byTemperature[v]! + viscositySlopes.byPressure * byPressure[v]!);
       }
     }
     return true;

@@ -14,7 +14,7 @@ import { createSpeciesThermochemistry, type SpeciesThermochemistry } from '../pr
 import { dataRange, type DataRange } from './data-range.js';
 import { frictionCoefficients, type FrictionCoefficients } from './friction.js';
 import { givenHeatContent, speciesHeatContent, type HeatContent } from './heat-content.js';
-import { createLocalProperties, type LocalProperties } from './local-properties.js';
+import { createLocalProperties, type LocalProperties } from './local/local-properties.js';
 import type { ReactorSpecification } from './reactor-specification.js';
 
 export interface ReactorModel {
@@ -74,7 +74,10 @@ export function createReactorModel(specification: ReactorSpecification): Reactor
   const rateFactors = reactions.map(({ basis }) => pellet.activity * perPelletVolume[basis]);
   const equationOfState = createEquationOfState(fluid.equationOfState, species);
   const lawFactors = equationOfState.isIdealGas ? undefined : new Float64Array(species.length + 1).fill(1);
-  const localProperties = createLocalProperties(specification);
+  const localProperties = createLocalProperties(specification, thermochemistry, {
+    massFlow,
+    massFlux: massFlow / crossSection,
+  });
   const equilibriumConstants = (reaction: number): ReturnType<typeof createEquilibriumConstant> =>
     createEquilibriumConstant(stoichiometry[reaction]!, thermochemistry);
   const rates = compileRates(

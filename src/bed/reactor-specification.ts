@@ -86,6 +86,8 @@ export interface ReactorSpecification {
     readonly diffusivities: readonly LocalProperty[];
     /** How diffusivities to be estimated follow from those of the pairs. */
     readonly diffusivityMixing: DiffusivityMixing;
+    /** Whether estimated transport properties are corrected for pressure. */
+    readonly isCorrectedForPressure: boolean;
     readonly heatCapacity: MixtureHeatCapacity;
   };
   readonly pellet: PelletSpecification;

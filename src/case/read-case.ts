@@ -15,6 +15,7 @@ import { buildReactions } from './build/build-reactions.js';
 import { buildSpecies } from './build/build-species.js';
 import { checkDataRange } from './build/check-data-range.js';
 import { checkEquilibrium } from './build/check-equilibrium.js';
+import { checkEstimates } from './build/check-estimates.js';
 import { checkSpeciesData } from './build/check-species-data.js';
 import { complete } from './build/holes.js';
 import { problemAt, type CaseContext } from './case-context.js';
@@ -103,7 +104,7 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
   const reactionCount = reactions?.records.length ?? 1;
   const fluid =
     isFluidRead && species
-      ? buildFluid(context, fluidReading, species.ids, reactionCount, assumptions)
+      ? buildFluid(context, fluidReading, species.ids, reactionCount, feed?.values.pressure, assumptions)
       : undefined;
   const molarDensity = createMolarDensity(context, fluid?.equationOfState, species);
   const molarFlows = feed && species && buildMolarFlows(context, feed, species, bedInput, molarDensity);
@@ -166,6 +167,7 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
     numerics: { tolerance: numerics.tolerance ?? defaultTolerance },
     assumptions,
   };
+  if (!checkEstimates(context, specification, assumptions)) return undefined;
   const isInRange = checkDataRange(context, specification);
   return checkEquilibrium(context, specification) && isInRange ? specification : undefined;
 }

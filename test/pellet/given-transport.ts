@@ -47,6 +47,7 @@ export function idealGas(
     thermalConductivity: { kind: 'estimate' },
     diffusivities: Array.from({ length: speciesCount }, () => ({ kind: 'estimate' })),
     diffusivityMixing: 'wilke',
+    isCorrectedForPressure: false,
     heatCapacity: { kind: 'species' },
     ...change,
   };

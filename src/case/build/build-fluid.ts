@@ -17,17 +17,22 @@ const equationNames = {
   soave_redlich_kwong: 'the gas follows the Soave–Redlich–Kwong equation of state (1972)',
 } as const;
 
+/** Pa; below, corrections of transport properties for pressure are within the scatter of the properties. */
+const correctedAbove = 1e6;
+
 /**
  * The fluid; what is not given is to be estimated.
  *
  * @param reading - undefined where the case has no such section
  * @param reactionCount - of reactions that could be read
+ * @param feedPressure - Pa; undefined where it could not be read
  */
 export function buildFluid(
   context: CaseContext,
   reading: SectionReading<FluidInput> | undefined,
   ids: readonly string[],
   reactionCount: number,
+  feedPressure: number | undefined,
   assumptions: Assumption[],
 ): ReactorSpecification['fluid'] | undefined {
   const values = reading?.values ?? {};
@@ -51,6 +56,7 @@ export function buildFluid(
     thermalConductivity: toLocal(values.thermal_conductivity),
     diffusivities,
     diffusivityMixing: mixing,
+    isCorrectedForPressure: values.pressure_correction ?? (feedPressure ?? 0) > correctedAbove,
     heatCapacity: toHeatCapacity(values.heat_capacity, assumptions),
   };
 }

@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { delegate, plainNumber, positive, property, quantity, temperature, word } from './leaves.js';
+import { delegate, flag, plainNumber, positive, property, quantity, temperature, word } from './leaves.js';
 import { estimateOr, mapOf, oneOrEach } from './choices.js';
 
 const share = quantity('fraction', 'share of one species', { atLeast: 0, atMost: 1 });
@@ -64,6 +64,9 @@ export const fluidSchema = z.strictObject({
   diffusivity_mixing: word(
     ['wilke', 'blanc', 'flux_ratios'],
     'how a diffusivity in the mixture follows from those of the pairs',
+  ).optional(),
+  pressure_correction: flag(
+    'whether estimated transport properties are corrected for pressure; where absent, above 10 bar',
   ).optional(),
 });
 

@@ -247,6 +247,18 @@ export function wholeNumber(description: string, bounds: Bounds): z.ZodType<numb
     .meta({ description, type: 'integer' });
 }
 
+/** `true` or `false`. */
+export function flag(description: string): z.ZodType<boolean> {
+  return z
+    .unknown()
+    .transform((value, context): boolean => {
+      if (typeof value === 'boolean') return value;
+      addFault(context, { code: 'wrong_type', found: describeValue(value), expected: '`true` or `false`' });
+      return z.NEVER;
+    })
+    .meta({ description, type: 'boolean' });
+}
+
 /** Free text; numbers count as text, since `title: 2024` is one. */
 export function text(description: string, longest = 2000): z.ZodType<string> {
   return z
