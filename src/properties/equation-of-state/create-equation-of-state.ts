@@ -1,4 +1,6 @@
+import { createPropertyFunction, type FluidProperty } from '../fluid-property.js';
 import type { SpeciesRecord } from '../species-record.js';
+import { createConstantDensity } from './constant-density.js';
 import { createCubicEquation } from './cubic-equation.js';
 import type { EquationOfState } from './equation-of-state.js';
 import { idealGasState } from './ideal-gas-state.js';
@@ -6,6 +8,11 @@ import { idealGasState } from './ideal-gas-state.js';
 /** An equation of state as the case asks for it; plain data, SI. */
 export type EquationOfStateSpecification =
   | { readonly kind: 'ideal' }
+  | {
+      readonly kind: 'constant_density';
+      /** kg/m³ */
+      readonly density: FluidProperty;
+    }
   | {
       readonly kind: 'peng_robinson' | 'soave_redlich_kwong';
       /** k_ij, symmetric with zero diagonal; rows and columns one per species. */
@@ -17,7 +24,11 @@ export function missingForEquation(
   { kind }: EquationOfStateSpecification,
   record: SpeciesRecord,
 ): readonly (keyof SpeciesRecord)[] {
-  if (kind === 'ideal') return [];
+  return kind === 'ideal' || kind === 'constant_density' ? [] : missingForCubic(record);
+}
+
+/** What a record lacks for a cubic equation, and for the phase check. */
+export function missingForCubic(record: SpeciesRecord): readonly (keyof SpeciesRecord)[] {
   const needed = ['criticalTemperature', 'criticalPressure', 'acentricFactor'] as const;
   return needed.filter((key) => record[key] === undefined);
 }
@@ -28,5 +39,10 @@ export function createEquationOfState(
   records: readonly SpeciesRecord[],
 ): EquationOfState {
   if (specification.kind === 'ideal') return idealGasState;
+  if (specification.kind === 'constant_density')
+    return createConstantDensity(
+      createPropertyFunction(specification.density),
+      records.map(({ molarMass }) => molarMass),
+    );
   return createCubicEquation(specification.kind, records, specification.binaryInteraction);
 }

@@ -25,7 +25,7 @@ export const cubicForms: Readonly<Record<CubicKind, CubicForm>> = {
     second: 1 - Math.SQRT2,
     attraction: 0.4572355289213822,
     size: 0.07779607390388846,
-    criticalCompressibility: 0.30740130869870385,
+    criticalCompressibility: 0.30740130869870386,
     slope: (omega) => 0.37464 + omega * (1.54226 - 0.26992 * omega),
   },
   soave_redlich_kwong: {

@@ -8,7 +8,7 @@ export interface FluidState {
   molarVolume: number;
   /** m³/(mol K), pressure and composition held */
   volumeByTemperature: number;
-  /** m³/(mol Pa), temperature and composition held; negative */
+  /** m³/(mol Pa), temperature and composition held; negative, or zero of what cannot be compressed */
   volumeByPressure: number;
   /** m³/mol; their mole-fraction mean is the molar volume */
   readonly partialMolarVolumes: Float64Array;
