@@ -26,6 +26,7 @@ export interface PoreDiffusion {
 /**
  * @param molarMasses - kg/mol, one per species
  * @param diameters - of the molecules, m, one per species; read where hindrance counts
+ * @throws RangeError where hindrance counts and a diameter is not known
  */
 export function createPoreDiffusion(
   structure: PoreStructure,
@@ -42,11 +43,12 @@ export function createPoreDiffusion(
   const shares = Float64Array.from(
     pores.flatMap(({ radius }, k) =>
       diameters.map((diameter) =>
-        hindrance === 'renkin' ? weights[k]! * renkinFactor(diameter! / (2 * radius)) : weights[k]!,
+        hindrance === 'renkin' ? weights[k]! * renkinFactor((diameter ?? NaN) / (2 * radius)) : weights[k]!,
       ),
     ),
   );
   const classCount = pores.length;
+  if (shares.some(Number.isNaN)) throw new RangeError('hindrance asks for the diameter of every molecule');
   return {
     effectiveInto(molecular, temperature, target) {
       const inverseRoot = 1 / Math.sqrt(temperature);
