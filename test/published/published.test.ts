@@ -2,12 +2,14 @@ import { describe, expect, it } from 'vitest';
 import { equilibriumRows } from './equilibrium.js';
 import { kineticsRows } from './kinetics.js';
 import { pelletRows } from './pellet.js';
+import { poreDiffusionRows } from './pore-diffusion.js';
 import { pressureDropRows } from './pressure-drop.js';
 import { missRatio, type PublishedRow } from './published-row.js';
 import { reactorRows } from './reactor.js';
 
 const areas: Readonly<Record<string, readonly PublishedRow[]>> = {
   pellet: pelletRows,
+  'pore diffusion': poreDiffusionRows,
   'pressure drop': pressureDropRows,
   kinetics: kineticsRows,
   equilibrium: equilibriumRows,
