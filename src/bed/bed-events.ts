@@ -94,6 +94,13 @@ export function createBedEvents(model: ReactorModel, balances: Balances): BedEve
       );
     }
   }
+  add(
+    'condensation',
+    1,
+    true,
+    () => model.condensation.excess(conditions.moleFractions, conditions.temperature, conditions.pressure),
+    () => 'the gas reaches its dew point',
+  );
   for (const target of targets) {
     const fed = model.feedFlows[target.speciesIndex]!;
     add(

@@ -11,6 +11,7 @@ import type { EquationOfState } from '../properties/equation-of-state/equation-o
 import { createPropertyFunction } from '../properties/fluid-property.js';
 import { createEquilibriumConstant } from '../properties/reaction-equilibrium.js';
 import { createSpeciesThermochemistry, type SpeciesThermochemistry } from '../properties/thermochemistry.js';
+import { createCondensationWatch, type CondensationWatch } from './condensation.js';
 import { dataRange, type DataRange } from './data-range.js';
 import { frictionCoefficients, type FrictionCoefficients } from './friction.js';
 import { givenHeatContent, speciesHeatContent, type HeatContent } from './heat-content.js';
@@ -51,6 +52,7 @@ export interface ReactorModel {
   readonly rateFactors: readonly number[];
   readonly pellet: PelletModel;
   readonly dataRange: DataRange;
+  readonly condensation: CondensationWatch;
 }
 
 /** Part of the run's tolerance that the pellet may use up: its error acts on the axial solution as a small error of the rates. */
@@ -128,6 +130,7 @@ export function createReactorModel(specification: ReactorSpecification): Reactor
       referenceHeats: isIsothermal ? undefined : heatContent?.referenceHeats,
       tolerance: specification.numerics.tolerance * pelletToleranceShare,
     }),
+    condensation: createCondensationWatch(specification),
     dataRange: dataRange(specification, thermochemistry),
   };
 }

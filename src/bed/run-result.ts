@@ -1,9 +1,11 @@
+import type { PoreRegime } from '../pellet/pores/pore-regimes.js';
 import type { Assumption } from './reactor-specification.js';
 
 /** Why a run ended before the end of the bed. Texts for each stand in `bed/stop-messages.ts`. */
 export type StopReason =
   | 'pressure_used_up'
   | 'property_range_left'
+  | 'condensation'
   | 'no_pellet_state'
   | 'reactant_overdrawn'
   | 'step_limit'
@@ -88,6 +90,8 @@ export interface SpeciesTransport {
   /** m/s */
   readonly filmMassTransfer: number | null;
   readonly fugacityCoefficient: number;
+  /** What controls its diffusion in each size of pore; empty where diffusion in the pores is given. */
+  readonly pores: readonly PoreRegime[];
 }
 
 /** Inside of one pellet, from the centre to the surface; SI. */

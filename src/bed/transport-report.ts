@@ -1,4 +1,6 @@
 /** What properties of fluid, film and pellet come to at the ends of the bed: the numbers behind the estimates. */
+import { moleculeDiameter } from '../pellet/pores/hindrance.js';
+import { poreRegimes } from '../pellet/pores/pore-regimes.js';
 import { gasConstant } from '../quantities/constants.js';
 import type { Balances } from './balances.js';
 import { activeSpecies } from './needed-properties.js';
@@ -17,6 +19,16 @@ export function transportReport(
   const { fluid, temperature, pressure, moleFractions } = balances.conditions;
   const { viscosity, thermalConductivity, diffusivities, transport } = model.localProperties;
   const molarMass = model.molarMasses.reduce((sum, mass, i) => sum + mass * moleFractions[i]!, 0);
+  const { pores } = model.specification.pellet.transport;
+  const regimes = pores
+    ? poreRegimes(
+        pores,
+        model.molarMasses,
+        model.specification.species.map(moleculeDiameter),
+        diffusivities,
+        temperature,
+      )
+    : [];
   const isActive = activeSpecies(model.specification);
   return [
     {
@@ -37,6 +49,7 @@ export function transportReport(
                 effectiveDiffusivity: known(transport.effectiveDiffusivities[speciesIndex]!),
                 filmMassTransfer: known(transport.massTransfer[speciesIndex]!),
                 fugacityCoefficient: Math.exp(fluid.logFugacityCoefficients[speciesIndex]!),
+                pores: regimes.filter((regime) => regime.speciesIndex === speciesIndex),
               },
             ]
           : [],

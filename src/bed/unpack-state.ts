@@ -24,7 +24,10 @@ export interface Unpacker {
 const pressureFloor = 1e-3;
 const temperatureIterations = 50;
 
-export function createUnpacker(model: ReactorModel, { heatIndex, pressureIndex }: StateLayout): Unpacker {
+export function createUnpacker(
+  model: ReactorModel,
+  { heatIndex, pressureIndex, size }: StateLayout,
+): Unpacker {
   const { speciesCount, reactionCount, stoichiometry, heatContent, equationOfState, lawFactors } = model;
   const { feed } = model.specification;
   const { isIdealGas } = equationOfState;
@@ -105,7 +108,22 @@ export function createUnpacker(model: ReactorModel, { heatIndex, pressureIndex }
     for (let i = 0; i < speciesCount; i++) lawFactors[i + 1] = Math.exp(fluid.logFugacityCoefficients[i]!);
   };
 
+  const last = new Float64Array(size).fill(Number.NaN);
+  let wasFound = false;
+  /** Events, monitor and tabulation look at the same state one after the other. */
+  const isLast = (state: Float64Array): boolean => {
+    for (let n = 0; n < size; n++) if (state[n] !== last[n]) return false;
+    return true;
+  };
+
   const unpack = (state: Float64Array): boolean => {
+    if (isLast(state)) return wasFound;
+    last.set(state);
+    wasFound = unpackAnew(state);
+    return wasFound;
+  };
+
+  const unpackAnew = (state: Float64Array): boolean => {
     let total = 0;
     for (let i = 0; i < speciesCount; i++) {
       let flow = model.feedFlows[i]!;

@@ -16,6 +16,8 @@ import { buildSpecies } from './build/build-species.js';
 import { checkDataRange } from './build/check-data-range.js';
 import { checkEquilibrium } from './build/check-equilibrium.js';
 import { checkEstimates } from './build/check-estimates.js';
+import { checkPhase } from './build/check-phase.js';
+import { checkPores } from './build/check-pores.js';
 import { checkSpeciesData } from './build/check-species-data.js';
 import { complete } from './build/holes.js';
 import { problemAt, type CaseContext } from './case-context.js';
@@ -168,8 +170,13 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
     assumptions,
   };
   if (!checkEstimates(context, specification, assumptions)) return undefined;
-  const isInRange = checkDataRange(context, specification);
-  return checkEquilibrium(context, specification) && isInRange ? specification : undefined;
+  const findings = [
+    checkDataRange(context, specification),
+    checkPores(context, specification),
+    checkPhase(context, specification, assumptions),
+    checkEquilibrium(context, specification),
+  ];
+  return findings.every(Boolean) ? specification : undefined;
 }
 
 function checkKeys(context: CaseContext): void {

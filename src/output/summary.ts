@@ -1,5 +1,5 @@
 import type { ReactorSpecification } from '../bed/reactor-specification.js';
-import type { RunResult } from '../bed/run-result.js';
+import type { RunResult, TransportReport } from '../bed/run-result.js';
 import { caution } from './caution.js';
 
 /** Where a result comes from. */
@@ -26,6 +26,37 @@ const byKey = <Entry>(
   value: (entry: Entry, index: number) => Json,
 ): Record<string, Json> =>
   Object.fromEntries(entries.map((entry, index) => [key(entry, index), value(entry, index)]));
+
+function transportOf(place: TransportReport, speciesIds: readonly string[]): Json {
+  return {
+    place: place.label,
+    position_m: place.position,
+    density_kg_m3: finite(place.density),
+    compressibility_factor: finite(place.compressibilityFactor),
+    viscosity_Pa_s: place.viscosity,
+    thermal_conductivity_W_m_K: place.thermalConductivity,
+    pellet_conductivity_W_m_K: place.pelletConductivity,
+    film_heat_transfer_W_m2_K: place.filmHeatTransfer,
+    species: byKey(
+      place.species,
+      ({ speciesIndex }) => speciesIds[speciesIndex]!,
+      (entry) => ({
+        diffusivity_m2_s: entry.diffusivity,
+        effective_diffusivity_m2_s: entry.effectiveDiffusivity,
+        film_mass_transfer_m_s: entry.filmMassTransfer,
+        fugacity_coefficient: finite(entry.fugacityCoefficient),
+        pores: entry.pores.map((pore) => ({
+          radius_m: pore.radius,
+          mechanism: pore.mechanism,
+          knudsen_diffusivity_m2_s: pore.knudsenDiffusivity,
+          knudsen_number: finite(pore.knudsenNumber),
+          mean_free_path_m: finite(pore.meanFreePath),
+          molecule_over_pore_diameter: pore.sizeRatio,
+        })),
+      }),
+    ),
+  };
+}
 
 /**
  * `summary.json`: units stand in the key names; numbers are never NaN or infinite, what is unknown is null.
@@ -94,6 +125,7 @@ export function summarise(
       definition,
       source,
     })),
+    transport: result.transport.map((place) => transportOf(place, speciesIds)),
     events: result.events.map(({ kind, position, message }) => ({ kind, position_m: position, message })),
     warnings: [...result.warnings],
     assumptions: result.assumptions.map(({ about, statement, source }) => ({ about, statement, source })),

@@ -49,6 +49,7 @@ export function createFieldBasis(input: PelletModelInput): FieldBasis {
     inverseConductivity: 0,
     filmHeatResistance: 0,
     hasFilm:
+      input.pellet.transport.film.kind === 'correlation' ||
       activeSpecies.some((i) => transport.massTransfer[i]! < Infinity) ||
       (!isIsothermal && transport.heatTransfer < Infinity),
   };

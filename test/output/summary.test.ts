@@ -35,6 +35,7 @@ describe('summary.json', () => {
       'effectiveness',
       'balances',
       'criteria',
+      'transport',
       'events',
       'warnings',
       'assumptions',

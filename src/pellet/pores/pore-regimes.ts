@@ -33,7 +33,7 @@ const transitionRange = [0.1, 10] as const;
  * Molecule over pore diameter from which the pore's walls hold the molecule all the time: 0.45 nm in a pore of 0.9 nm, the upper end of
  * zeolites. Common practice puts the bound at pore diameters of about 1 nm.
  */
-const configurationalRatio = 0.5;
+export const configurationalRatio = 0.5;
 
 /**
  * @param molarMasses - kg/mol, one per species

@@ -62,26 +62,36 @@ export function createGasTransport(options: GasTransportOptions): GasTransport {
   const viscosities = new Float64Array(count);
   const conductivities = new Float64Array(count);
   let preparedTemperature = Number.NaN;
+  const preparedFractions = new Float64Array(count).fill(Number.NaN);
+  let denominators: Float64Array = new Float64Array(count);
 
-  const prepare = (temperature: number): void => {
-    if (temperature === preparedTemperature) return;
-    preparedTemperature = temperature;
-    for (let i = 0; i < viscosityOf.length; i++) viscosities[i] = viscosityOf[i]!.value(temperature);
+  /** Viscosities of the gases and what mixing needs, which viscosity and conductivity share. */
+  const prepare = (moleFractions: Float64Array, temperature: number): void => {
+    let isPrepared = temperature === preparedTemperature;
+    if (!isPrepared) {
+      preparedTemperature = temperature;
+      for (let i = 0; i < count; i++) viscosities[i] = viscosityOf[i]!.value(temperature);
+    }
+    for (let i = 0; i < count; i++) {
+      isPrepared = isPrepared && moleFractions[i] === preparedFractions[i];
+      preparedFractions[i] = moleFractions[i]!;
+    }
+    if (!isPrepared) denominators = factors.denominatorsAt(moleFractions, viscosities);
   };
 
   return {
     viscosity(moleFractions, temperature, pressure) {
-      prepare(temperature);
-      const denominators = factors.denominatorsAt(moleFractions, viscosities);
+      prepare(moleFractions, temperature);
       const dilute = mixWithFactors(moleFractions, viscosities, denominators);
       if (!pseudoCritical) return dilute;
       const critical = pseudoCritical(moleFractions);
       return dilute * lucasPressureFactor(temperature / critical.temperature, pressure / critical.pressure);
     },
     conductivity(moleFractions, temperature, _pressure, molarDensity) {
-      prepare(temperature);
-      for (let i = 0; i < count; i++) conductivities[i] = conductivityOf[i]!.value(temperature);
-      const denominators = factors.denominatorsAt(moleFractions, viscosities);
+      prepare(moleFractions, temperature);
+      for (let i = 0; i < count; i++) {
+        conductivities[i] = conductivityOf[i]!.fromViscosity(temperature, viscosities[i]!);
+      }
       const dilute = mixWithFactors(moleFractions, conductivities, denominators);
       return pseudoCritical
         ? dilute + stielThodosExcess(molarDensity, pseudoCritical(moleFractions))

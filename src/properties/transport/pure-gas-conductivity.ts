@@ -19,6 +19,11 @@ export function missingForConductivity(record: SpeciesRecord): MissingFields {
   return [...new Set([...missingForViscosity(record), ...own])];
 }
 
+export interface GasConductivity extends PureGasProperty {
+  /** W/(m K), where the viscosity at that temperature, Pa s, is known already. */
+  readonly fromViscosity: (temperature: number, viscosity: number) => number;
+}
+
 /**
  * Thermal conductivity of a pure gas at low pressure, λ M/(η Cv) = 3.75 Ψ/(Cv/R).
  *
@@ -33,10 +38,11 @@ export function createGasConductivity(
   record: SpeciesRecord,
   heatCapacity: (temperature: number) => number,
   viscosity: PureGasProperty,
-): PureGasProperty {
+): GasConductivity {
   if (record.thermalConductivity) {
     const { value } = createPropertyFunction(record.thermalConductivity);
-    return { value: (temperature) => value(temperature, lowPressure), method: 'given' };
+    const given = (temperature: number): number => value(temperature, lowPressure);
+    return { value: given, fromViscosity: given, method: 'given' };
   }
   const missing = missingForConductivity(record);
   if (missing.length > 0) throw new RangeError(`${record.id} has no ${missing.join(', ')}`);
@@ -45,17 +51,19 @@ export function createGasConductivity(
   const isPolar = (record.dipoleMoment ?? 0) > smallestDipole;
   const beta = isPolar ? polarBeta : 0.7862 - 0.7109 * omega + 1.3168 * omega * omega;
   const factor = (3.75 * gasConstant) / record.molarMass;
+  const fromViscosity = (temperature: number, known: number): number => {
+    const alpha = heatCapacity(temperature) / gasConstant - 2.5;
+    const reduced = temperature / criticalTemperature;
+    const z = 2 + 10.5 * reduced * reduced;
+    const psi =
+      1 +
+      (alpha * (0.215 + 0.28288 * alpha - 1.061 * beta + 0.26665 * z)) /
+        (0.6366 + beta * z + 1.061 * alpha * beta);
+    return factor * psi * known;
+  };
   return {
-    value(temperature) {
-      const alpha = heatCapacity(temperature) / gasConstant - 2.5;
-      const reduced = temperature / criticalTemperature;
-      const z = 2 + 10.5 * reduced * reduced;
-      const psi =
-        1 +
-        (alpha * (0.215 + 0.28288 * alpha - 1.061 * beta + 0.26665 * z)) /
-          (0.6366 + beta * z + 1.061 * alpha * beta);
-      return factor * psi * viscosity.value(temperature);
-    },
+    value: (temperature) => fromViscosity(temperature, viscosity.value(temperature)),
+    fromViscosity,
     method: 'chungConductivity',
   };
 }
