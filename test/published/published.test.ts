@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { equilibriumRows } from './equilibrium.js';
+import { filmRows } from './film.js';
 import { kineticsRows } from './kinetics.js';
 import { pelletRows } from './pellet.js';
 import { poreDiffusionRows } from './pore-diffusion.js';
@@ -10,6 +11,7 @@ import { reactorRows } from './reactor.js';
 const areas: Readonly<Record<string, readonly PublishedRow[]>> = {
   pellet: pelletRows,
   'pore diffusion': poreDiffusionRows,
+  film: filmRows,
   'pressure drop': pressureDropRows,
   kinetics: kineticsRows,
   equilibrium: equilibriumRows,

@@ -11,13 +11,23 @@ export interface FilmGeometry {
   readonly sphericity: number;
 }
 
+export type FilmDiameter = 'sauter' | 'volume' | 'surface';
+
 export interface FilmCorrelation {
   readonly name: string;
   readonly source: string;
-  /** Which diameter stands in its numbers: 6 V/S, that of the sphere of equal volume, or of equal surface. */
-  readonly diameter: 'sauter' | 'volume' | 'surface';
+  /**
+   * Which diameter stands in its numbers: 6 V/S, that of the sphere of equal volume, or of equal surface. All were measured with spheres for
+   * the most part; what else they hold for is common practice.
+   */
+  readonly diameter: FilmDiameter;
   /** Of ρ u d/μ with the superficial velocity u. */
   readonly reynoldsRange: readonly [number, number];
+  /** Where the source states its range in another number; `reynoldsRange` is then that of spheres at void fraction 0.4. */
+  readonly ownReynolds?: {
+    readonly range: readonly [number, number];
+    readonly of: (reynolds: number, geometry: FilmGeometry) => number;
+  };
   readonly voidRange: readonly [number, number];
   readonly scatter: string;
   /** @param reynolds - ρ u d/μ, superficial @param schmidt - or Prandtl number */
@@ -34,10 +44,11 @@ const fromFactor =
 
 export const filmCorrelations: Readonly<Record<FilmCorrelationName, FilmCorrelation>> = {
   wakao_funazkri: {
+    // The same formula twice; for heat the range is 15 to 8500.
     name: 'Wakao–Funazkri',
     source:
       'Wakao & Funazkri (1978), Chem. Eng. Sci. 33, 1375; for heat Wakao, Kaguei & Funazkri (1979), Chem. Eng. Sci. 34, 325',
-    diameter: 'sauter',
+    diameter: 'volume',
     reynoldsRange: [3, 1e4],
     voidRange: always,
     scatter: '25 %',
@@ -47,8 +58,11 @@ export const filmCorrelations: Readonly<Record<FilmCorrelationName, FilmCorrelat
     name: 'Thoenes–Kramers',
     source: 'Thoenes & Kramers (1958), Chem. Eng. Sci. 8, 271',
     diameter: 'volume',
-    // Of Re/((1-ε) g); with ε = 0.4 and spheres.
     reynoldsRange: [24, 2400],
+    ownReynolds: {
+      range: [40, 4000],
+      of: (reynolds, { voidFraction, sphericity }) => (reynolds * sphericity) / (1 - voidFraction),
+    },
     voidRange: [0.25, 0.5],
     scatter: '10 %',
     sherwood(reynolds, schmidt, { voidFraction, sphericity }) {
@@ -59,7 +73,7 @@ export const filmCorrelations: Readonly<Record<FilmCorrelationName, FilmCorrelat
   petrovic_thodos: {
     name: 'Petrovic–Thodos',
     source: 'Petrovic & Thodos (1968), Ind. Eng. Chem. Fundam. 7, 274',
-    diameter: 'sauter',
+    diameter: 'volume',
     reynoldsRange: [3, 2000],
     voidRange: always,
     scatter: '20 %',
@@ -68,7 +82,7 @@ export const filmCorrelations: Readonly<Record<FilmCorrelationName, FilmCorrelat
   dwivedi_upadhyay: {
     name: 'Dwivedi–Upadhyay',
     source: 'Dwivedi & Upadhyay (1977), Ind. Eng. Chem. Process Des. Dev. 16, 157',
-    diameter: 'sauter',
+    diameter: 'volume',
     reynoldsRange: [0.01, 15_000],
     voidRange: always,
     scatter: '18 %',
@@ -78,8 +92,9 @@ export const filmCorrelations: Readonly<Record<FilmCorrelationName, FilmCorrelat
     name: 'Gnielinski',
     source: 'Gnielinski (1978), Verfahrenstechnik 12, 363; form factor 1 + 1.5 (1-ε) of spheres',
     diameter: 'surface',
-    // Of Re/ε from 100 to 20 000 with ε = 0.4; its stated lower bound is Re Pr/ε above 500.
+    // Its lower bound is also stated as Re Pr/ε above 500.
     reynoldsRange: [40, 8000],
+    ownReynolds: { range: [100, 20_000], of: (reynolds, { voidFraction }) => reynolds / voidFraction },
     voidRange: [0.26, 1],
     scatter: '20 %',
     sherwood(reynolds, schmidt, { voidFraction }) {
