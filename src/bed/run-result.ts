@@ -46,10 +46,6 @@ export interface Profile {
   readonly surfaceTemperatures: Float64Array;
   /** K */
   readonly centreTemperatures: Float64Array;
-  /** Reactions with a direction that equilibrium sets: those written as reversible whose constant follows from the species' data. */
-  readonly equilibrium: readonly ReactionApproach[];
-  /** What conversions would be if all those reactions came to equilibrium at the temperature and pressure of the position. */
-  readonly equilibriumConversions: readonly EquilibriumConversion[];
 }
 
 /** How near one reaction is to its equilibrium along the bed. */
@@ -59,6 +55,20 @@ export interface ReactionApproach {
   readonly quotientRatios: Float64Array;
   /** K, temperature of the gas less that at which its composition would be at equilibrium; NaN where there is none. */
   readonly temperatureApproaches: Float64Array;
+}
+
+/** Equilibrium of the reactions written as reversible whose constants follow from the species' data. */
+export interface EquilibriumLine {
+  readonly approaches: readonly ReactionApproach[];
+  /** What conversions would be if all those reactions came to equilibrium at the temperature and pressure of the position. */
+  readonly conversions: readonly EquilibriumConversion[];
+  /** Where the feed comes to equilibrium without exchange of heat, at its pressure; absent where that lies outside the species' data. */
+  readonly adiabatic?: {
+    /** K */
+    readonly temperature: number;
+    readonly moleFractions: readonly number[];
+    readonly conversions: readonly { readonly speciesIndex: number; readonly value: number }[];
+  };
 }
 
 export interface EquilibriumConversion {
@@ -153,6 +163,8 @@ export interface RunResult {
   readonly profile: Profile;
   readonly pellets: readonly PelletProfile[];
   readonly transport: readonly TransportReport[];
+  /** Absent where no reaction is reversible. */
+  readonly equilibrium?: EquilibriumLine;
   readonly outlet: {
     /** m; the bed's length, or where the run stopped. */
     readonly position: number;

@@ -2,6 +2,7 @@ import { createBalances, type Balances } from './balances.js';
 import { createBedEvents, type BedEvent } from './bed-events.js';
 import { bedWarnings } from './bed-warnings.js';
 import { closures } from './closures.js';
+import { equilibriumLine } from './equilibrium-line.js';
 import { inletGroups } from './inlet-groups.js';
 import { integrateBed, stopReason } from './integrate-bed.js';
 import { collectAssumptions } from './model-assumptions.js';
@@ -12,14 +13,23 @@ import { stopMessages } from './stop-messages.js';
 import { transportReport } from './transport-report.js';
 import { pelletProfile, tabulate, type BedStates, type Tabulation } from './tabulate.js';
 
+export interface SolveOptions {
+  /** Whether equilibrium is worked out beside the profile of reversible reactions; it takes about as long as the bed itself. */
+  readonly withEquilibrium?: boolean;
+}
+
 /**
  * Solves a reactor from inlet to outlet, or to where the physics ends it.
  *
  * @param specification - whole reactor, SI, as made by the case reader; its data are taken to be consistent
+ * @param options - what may be left out to save time
  * @returns plain data; `status` tells whether the end of the bed was reached
  * @throws only on a defect of the program: what a case can do to itself ends in `status: 'stopped'`
  */
-export function solveReactor(specification: ReactorSpecification): RunResult {
+export function solveReactor(
+  specification: ReactorSpecification,
+  { withEquilibrium = true }: SolveOptions = {},
+): RunResult {
   const model = createReactorModel(specification);
   const balances = createBalances(model);
   const groups = inletGroups(model, balances);
@@ -53,6 +63,15 @@ export function solveReactor(specification: ReactorSpecification): RunResult {
   const pellets = interiors(model, balances, positions, integration, peak, rows);
   const closure = closures(model, balances, states);
   const outlet = outletOf(model, balances, integration.position, integration.state);
+  const conversions = conversionsOf(model, outlet.molarFlows);
+  const equilibrium = withEquilibrium
+    ? equilibriumLine(
+        model,
+        balances,
+        states,
+        conversions.map(({ speciesIndex }) => speciesIndex),
+      )
+    : undefined;
   const { work } = model.pellet;
   return {
     status: stop ? 'stopped' : 'complete',
@@ -65,8 +84,9 @@ export function solveReactor(specification: ReactorSpecification): RunResult {
       ...transportReport('inlet', 0, balances.initialState, model, balances),
       ...transportReport('outlet', integration.position, integration.state, model, balances),
     ],
+    ...(equilibrium && { equilibrium }),
     outlet,
-    conversions: conversionsOf(model, outlet.molarFlows),
+    conversions,
     selectivities: selectivitiesOf(model, outlet.molarFlows),
     peak: { temperature: peak.temperature, position: peak.position },
     pressureDrop: specification.feed.pressure - outlet.pressure,

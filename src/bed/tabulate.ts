@@ -119,8 +119,6 @@ export function tabulate(
       effectiveness,
       surfaceTemperatures,
       centreTemperatures,
-      equilibrium: [],
-      equilibriumConversions: [],
     },
     bulkRates,
     averageRates,

@@ -22,7 +22,7 @@ function cell(value: number): string {
  * `profile.csv`: a row per output position. Units stand in the headers; flows are of the whole reactor, rates are averaged over the pellet per
  * catalyst mass, `eta` is the averaged rate over the rate at bulk conditions (empty where the latter vanishes).
  */
-export function profileCsv({ profile, speciesIds, reactionNames }: RunResult): string {
+export function profileCsv({ profile, equilibrium, speciesIds, reactionNames }: RunResult): string {
   return columnsToCsv([
     { header: 'z_m', values: profile.positions },
     { header: 'T_K', values: profile.temperatures },
@@ -39,11 +39,11 @@ export function profileCsv({ profile, speciesIds, reactionNames }: RunResult): s
       ? [{ header: 'compressibility_factor', values: profile.compressibilityFactors }]
       : []),
     ...(profile.viscosities ? [{ header: 'viscosity_Pa_s', values: profile.viscosities }] : []),
-    ...profile.equilibrium.flatMap(({ reactionIndex, quotientRatios, temperatureApproaches }) => [
+    ...(equilibrium?.approaches ?? []).flatMap(({ reactionIndex, quotientRatios, temperatureApproaches }) => [
       { header: `quotient_over_K_${reactionNames[reactionIndex]!}`, values: quotientRatios },
       { header: `approach_${reactionNames[reactionIndex]!}_K`, values: temperatureApproaches },
     ]),
-    ...profile.equilibriumConversions.map(({ speciesIndex, values }) => ({
+    ...(equilibrium?.conversions ?? []).map(({ speciesIndex, values }) => ({
       header: `equilibrium_conversion_${speciesIds[speciesIndex]!}`,
       values,
     })),

@@ -27,6 +27,38 @@ const byKey = <Entry>(
 ): Record<string, Json> =>
   Object.fromEntries(entries.map((entry, index) => [key(entry, index), value(entry, index)]));
 
+/** At the outlet, and where the feed would come to without exchange of heat; null where nothing is reversible. */
+function equilibriumOf({ equilibrium, speciesIds, reactionNames }: RunResult): Json {
+  if (!equilibrium) return null;
+  const { approaches, conversions, adiabatic } = equilibrium;
+  return {
+    outlet: byKey(
+      approaches,
+      ({ reactionIndex }) => reactionNames[reactionIndex]!,
+      ({ quotientRatios, temperatureApproaches }) => ({
+        quotient_over_K: finite(quotientRatios.at(-1)),
+        temperature_approach_K: finite(temperatureApproaches.at(-1)),
+      }),
+    ),
+    conversion_at_outlet_conditions: byKey(
+      conversions,
+      ({ speciesIndex }) => speciesIds[speciesIndex]!,
+      ({ values }) => finite(values.at(-1)),
+    ),
+    adiabatic: adiabatic
+      ? {
+          temperature_K: finite(adiabatic.temperature),
+          mole_fraction: byKey(adiabatic.moleFractions, (_value, i) => speciesIds[i]!, finite),
+          conversion: byKey(
+            adiabatic.conversions,
+            ({ speciesIndex }) => speciesIds[speciesIndex]!,
+            ({ value }) => finite(value),
+          ),
+        }
+      : null,
+  };
+}
+
 function transportOf(place: TransportReport, speciesIds: readonly string[]): Json {
   return {
     place: place.label,
@@ -104,6 +136,7 @@ export function summarise(
     pressure_drop_Pa: finite(result.pressureDrop),
     heat_removed_W: finite(result.heatRemoved),
     catalyst_mass_kg: finite(result.catalystMass),
+    equilibrium: equilibriumOf(result),
     effectiveness: byKey(
       result.effectiveness,
       (_entry, j) => reactionNames[j]!,

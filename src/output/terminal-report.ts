@@ -56,6 +56,18 @@ export function keyFigures(result: RunResult, specification: ReactorSpecificatio
       `${selectivity === null ? 'none' : percent(selectivity)}, ${percent(gained)}`,
     ]);
   }
+  for (const { reactionIndex, temperatureApproaches } of result.equilibrium?.approaches ?? []) {
+    const approach = temperatureApproaches.at(-1)!;
+    if (!Number.isFinite(approach)) continue;
+    rows.push([`approach to equilibrium, ${reactionNames[reactionIndex]!}`, `${approach.toFixed(1).replace(/^-0\.0$/, '0.0')} K`]);
+  }
+  const adiabatic = result.equilibrium?.adiabatic;
+  if (adiabatic && specification.heat.mode === 'adiabatic') {
+    const reached = adiabatic.conversions.map(
+      ({ speciesIndex, value }) => `${percent(value)} of ${speciesIds[speciesIndex]!}`,
+    );
+    rows.push(['adiabatic equilibrium', [temperature(adiabatic.temperature), ...reached].join(', ')]);
+  }
   result.effectiveness.forEach(({ inlet, mean, outlet: out }, j) => {
     const values = [inlet, mean, out].map((value) => (value === null ? '–' : significant(value, 3)));
     rows.push([

@@ -21,14 +21,6 @@ export const inventedResult: RunResult = {
     centreTemperatures: Float64Array.of(602, 614, 603),
     compressibilityFactors: Float64Array.of(0.97, 0.98, 0.99),
     viscosities: Float64Array.of(3e-5, 3.1e-5, 3.05e-5),
-    equilibrium: [
-      {
-        reactionIndex: 1,
-        quotientRatios: Float64Array.of(0, 0.12, 0.98),
-        temperatureApproaches: Float64Array.of(NaN, -80, -2),
-      },
-    ],
-    equilibriumConversions: [{ speciesIndex: 0, values: Float64Array.of(0.91, 0.87, 0.9) }],
   },
   pellets: [
     {
@@ -51,6 +43,21 @@ export const inventedResult: RunResult = {
     },
   ],
   transport: [],
+  equilibrium: {
+    approaches: [
+      {
+        reactionIndex: 1,
+        quotientRatios: Float64Array.of(0, 0.12, 0.98),
+        temperatureApproaches: Float64Array.of(NaN, -80, -2),
+      },
+    ],
+    conversions: [{ speciesIndex: 0, values: Float64Array.of(0.91, 0.87, 0.9) }],
+    adiabatic: {
+      temperature: 633.25,
+      moleFractions: [0.2, 0.8],
+      conversions: [{ speciesIndex: 0, value: 0.8 }],
+    },
+  },
   outlet: {
     position: 1,
     temperature: 601,

@@ -37,6 +37,7 @@ const expectedHeader =
 
 describe('profile.csv', () => {
   const { profile } = inventedResult;
+  const equilibrium = inventedResult.equilibrium!;
   const [header, ...rows] = parseStrictly(profileCsv(inventedResult));
 
   it('has the headers that are documented, in their order, the unit in each', () => {
@@ -66,9 +67,9 @@ describe('profile.csv', () => {
       profile.densities,
       profile.compressibilityFactors!,
       profile.viscosities!,
-      profile.equilibrium[0]!.quotientRatios,
-      profile.equilibrium[0]!.temperatureApproaches,
-      profile.equilibriumConversions[0]!.values,
+      equilibrium.approaches[0]!.quotientRatios,
+      equilibrium.approaches[0]!.temperatureApproaches,
+      equilibrium.conversions[0]!.values,
     ];
     expect(rows).toHaveLength(profile.positions.length);
     rows.forEach((row, i) => {

@@ -32,6 +32,7 @@ describe('summary.json', () => {
       'pressure_drop_Pa',
       'heat_removed_W',
       'catalyst_mass_kg',
+      'equilibrium',
       'effectiveness',
       'balances',
       'criteria',

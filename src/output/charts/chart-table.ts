@@ -122,13 +122,28 @@ function conversionChart(
       points: pointsOf(positions, flows, -100 / flows[0]!, 100),
     };
   });
+  const equilibrium = (result.equilibrium?.conversions ?? []).flatMap(
+    ({ speciesIndex, values }): Series[] => {
+      const style = result.conversions.findIndex((entry) => entry.speciesIndex === speciesIndex);
+      return style < 0
+        ? []
+        : [
+            {
+              label: `${result.speciesIds[speciesIndex]!} at equilibrium`,
+              points: pointsOf(positions, values, 100),
+              style,
+              isReference: true,
+            },
+          ];
+    },
+  );
   return lineChart({
     title: 'Conversion along the bed',
     subtitle: title,
     xTitle: alongBed,
     yTitle: 'Conversion / %',
     yRange: { lowest: 0 },
-    series,
+    series: [...series, ...equilibrium],
     limits: targets.map(({ speciesIndex, conversion }) => ({
       value: 100 * conversion,
       label: `target for ${result.speciesIds[speciesIndex]!}, ${significant(100 * conversion, 4)} %`,

@@ -15,6 +15,8 @@ export interface Series {
   readonly points: readonly Point[];
   /** Index of the line style; the order of the series where absent. */
   readonly style?: number;
+  /** Drawn thin and dashed: what a line is compared with. */
+  readonly isReference?: boolean;
 }
 
 export interface LineChart {
@@ -48,12 +50,12 @@ export function lineChart(chart: LineChart): ChartConfiguration<'line', Point[]>
     type: 'line',
     data: {
       datasets: [
-        ...chart.series.map(({ label, points, style }, index) => ({
+        ...chart.series.map(({ label, points, style, isReference }, index) => ({
           label,
           data: [...points],
           borderColor: lineStyle(style ?? index).colour,
-          borderDash: [...lineStyle(style ?? index).dash],
-          borderWidth: 2.2,
+          borderDash: isReference ? [5, 4] : [...lineStyle(style ?? index).dash],
+          borderWidth: isReference ? 1.2 : 2.2,
           pointRadius: 0,
           tension: 0,
           spanGaps: false,
