@@ -151,6 +151,19 @@ describe('pores that cross at random', () => {
     expect(relative(obtained - macroPart, threePaths - macroPorosity ** 2 * inMacro)).toBeLessThan(1e-4);
   });
 
+  it('are too open where macropores resist like micropores, by no more than is said', () => {
+    // Against the same three paths; both kinds molecular, of one diffusivity, ε_M = ε_μ = 0.4.
+    const inParticle = (0.4 / 0.6) ** 2;
+    const threePaths = 0.16 + 0.36 * inParticle + 2 * 0.4 * 0.6 * 2 * inSeries(1, inParticle);
+    const pores = [
+      { radius: 2, fraction: 0.5 },
+      { radius: 1, fraction: 0.5 },
+    ];
+    const excess = effective({ ...base, ...random, porosity: 0.8, pores }) / molecular / threePaths - 1;
+    expect(excess).toBeGreaterThan(0.2);
+    expect(excess).toBeLessThan(0.22);
+  });
+
   it('of one size in both parts come to the closed form, in either order', () => {
     const [large, small] = [0.45 * 0.4, 0.45 * 0.6];
     const expected =
