@@ -20,6 +20,8 @@ import { checkPhase } from './build/check-phase.js';
 import { checkPores } from './build/check-pores.js';
 import { checkSpeciesData } from './build/check-species-data.js';
 import { complete } from './build/holes.js';
+import { readSpeciesLibraries, type ReadSpeciesFile } from './build/species-files.js';
+import { ownRecordSource } from './build/species-source.js';
 import { problemAt, type CaseContext } from './case-context.js';
 import { readKeys, readSection, reportUnknownKey } from './read-section.js';
 import {
@@ -52,6 +54,11 @@ const optionalKeys = [
 const formatVersion = 1;
 const defaultTolerance = 1e-6;
 
+export interface ReadOptions {
+  /** Text of a species file that the case names; without it such a case is refused. */
+  readonly readSpeciesFile?: ReadSpeciesFile;
+}
+
 export interface ReadCase {
   readonly specification: ReactorSpecification;
   readonly warnings: readonly Problem[];
@@ -60,15 +67,16 @@ export interface ReadCase {
 /**
  * @param source - the whole text of the file
  * @param fileName - as it is to appear in messages
+ * @param options - how files beside the case are read
  * @throws CaseError with every problem of the file, warnings included, when any of them is an error
  */
-export function readCase(source: string, fileName: string): ReadCase {
+export function readCase(source: string, fileName: string, options: ReadOptions = {}): ReadCase {
   const problems: Problem[] = [];
   const report = (problem: Problem): void => {
     problems.push(problem);
   };
   const root = readYamlDocument(source, report);
-  const specification = root && readRoot({ source, root, report });
+  const specification = root && readRoot({ source, root, report }, options);
   if (problems.some(({ severity }) => severity === 'error') || !specification) {
     if (problems.length === 0) throw new Error('a case came to nothing without a reported problem');
     throw new CaseError(fileName, source, problems);
@@ -76,7 +84,7 @@ export function readCase(source: string, fileName: string): ReadCase {
   return { specification, warnings: problems };
 }
 
-function readRoot(context: CaseContext): ReactorSpecification | undefined {
+function readRoot(context: CaseContext, options: ReadOptions): ReactorSpecification | undefined {
   const { root } = context;
   if (root.kind !== 'map') {
     problemAt(context, [], {
@@ -92,9 +100,9 @@ function readRoot(context: CaseContext): ReactorSpecification | undefined {
   const notes = readSection(context, ['notes'], text('notes', 20_000)) ?? '';
   readSection(context, ['start'], word(['cold'], 'branch where several pellet states exist', ['hot']));
   readSection(context, ['studies'], later('`studies`'));
-  readSection(context, ['species_files'], later('`species_files`'));
 
-  const species = buildSpecies(context, assumptions);
+  const libraries = readSpeciesLibraries(context, options.readSpeciesFile);
+  const species = buildSpecies(context, libraries, `${ownRecordSource} in the case`, assumptions);
   const reactions = buildReactions(context, species, readConstants(context, ['constants'], new Map()));
   const bedInput = readSection(context, ['bed'], bedSchema);
   const feed = readKeys(context, ['feed'], feedSchema);

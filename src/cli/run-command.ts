@@ -86,13 +86,15 @@ async function solveOne(
     { name: 'profile.csv', content: profileCsv(result) },
     { name: 'pellet.csv', content: pelletCsv(result) },
     { name: 'case.yaml', content: loaded.bytes },
+    ...loaded.speciesFiles.map(({ name, bytes }) => ({ name, content: bytes })),
   ];
   if (options.charts) {
     const { drawCharts } = await import('../output/draw-charts.js');
     files.push(...drawCharts(result, specification));
   }
   const names = [...files.map(({ name }) => name), 'summary.json'];
-  const provenance = { tool: 'bedwright', version, caseFile, caseHash, files: names } as const;
+  const speciesFiles = loaded.speciesFiles.map(({ name, hash }) => ({ name, hash }));
+  const provenance = { tool: 'bedwright', version, caseFile, caseHash, speciesFiles, files: names } as const;
   const summary = summarise(result, specification, provenance, seconds);
   files.push({ name: 'summary.json', content: `${JSON.stringify(summary, null, 2)}\n` });
   await uninterrupted(() => writeResultFolder(target, files));

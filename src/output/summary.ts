@@ -10,6 +10,8 @@ export interface Provenance {
   readonly caseFile: string;
   /** SHA-256 of the case file's bytes, hexadecimal. */
   readonly caseHash: string;
+  /** Species files that the case names, with their SHA-256. */
+  readonly speciesFiles: readonly { readonly name: string; readonly hash: string }[];
   /** Names of all files of the result; a folder that holds others is not overwritten. */
   readonly files: readonly string[];
 }
@@ -168,6 +170,11 @@ export function summarise(
       version: provenance.version,
       case_file: provenance.caseFile,
       case_sha256: provenance.caseHash,
+      species_files: byKey(
+        provenance.speciesFiles,
+        ({ name }) => name,
+        ({ hash }) => hash,
+      ),
       files: [...provenance.files],
     },
     caution,

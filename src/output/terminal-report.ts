@@ -59,7 +59,10 @@ export function keyFigures(result: RunResult, specification: ReactorSpecificatio
   for (const { reactionIndex, temperatureApproaches } of result.equilibrium?.approaches ?? []) {
     const approach = temperatureApproaches.at(-1)!;
     if (!Number.isFinite(approach)) continue;
-    rows.push([`approach to equilibrium, ${reactionNames[reactionIndex]!}`, `${approach.toFixed(1).replace(/^-0\.0$/, '0.0')} K`]);
+    rows.push([
+      `approach to equilibrium, ${reactionNames[reactionIndex]!}`,
+      `${approach.toFixed(1).replace(/^-0\.0$/, '0.0')} K`,
+    ]);
   }
   const adiabatic = result.equilibrium?.adiabatic;
   if (adiabatic && specification.heat.mode === 'adiabatic') {

@@ -46,6 +46,7 @@ export type QuantityKindName =
   | 'massTransferCoefficient'
   | 'heatTransferCoefficient'
   | 'molarMass'
+  | 'molarVolume'
   | 'molarEnergy'
   | 'molarEntropy'
   | 'fraction';
@@ -126,6 +127,10 @@ export const quantityKinds: Readonly<Record<QuantityKindName, QuantityKind>> = {
     'g/mol',
     'kg/kmol',
     'kg/mol',
+  ]),
+  molarVolume: kind('molar_volume', [0, 3, 0, -1, 0], 'a volume per amount', '94.1 cm^3/mol', [
+    'cm^3/mol',
+    'm^3/mol',
   ]),
   molarEnergy: kind('molar_energy', [1, 2, -2, -1, 0], 'an energy per amount', '-41.2 kJ/mol', [
     'kJ/mol',

@@ -107,6 +107,7 @@ describe('run', () => {
       version,
       case_file: 'marked.yaml',
       case_sha256: createHash('sha256').update(bytes).digest('hex'),
+      species_files: {},
       files: ['profile.csv', 'pellet.csv', 'case.yaml', 'summary.json'],
     });
   });

@@ -447,25 +447,10 @@ describe('names of JavaScript’s own', () => {
 const later: readonly (readonly [search: string, replacement: string, path: string])[] = [
   ['start', 'title: S', 'start: hot\ntitle: S'] as const,
   ['studies', 'title: S', 'studies: {size: {}}\ntitle: S'] as const,
-  ['species_files', 'title: S', 'species_files: [a.yaml]\ntitle: S'] as const,
 ].map(([path, search, replacement]): readonly [string, string, string] => [search, replacement, path]);
 
 const laterKeys: readonly (readonly [search: string, replacement: string, path: string])[] = [
   ...later,
-  ...[
-    'critical_temperature: 1 K',
-    'critical_pressure: 1 bar',
-    'critical_volume: 1',
-    'acentric_factor: 0.1',
-    'dipole_moment: 1',
-    'diffusion_volume: 1',
-    'viscosity: 1',
-    'thermal_conductivity: 1',
-  ].map((entry): readonly [string, string, string] => [
-    'name: feed aromatic',
-    `name: feed aromatic, ${entry}`,
-    `species.A.${entry.split(':')[0]!}`,
-  ]),
   ['  method: full', '  transport: dusty_gas\n  method: full', 'pellet.transport'],
   ...['ring', 'holed_cylinder', 'lobed', 'custom'].map((shape): readonly [string, string, string] => [
     '{ sphere: { diameter: 4 mm } }',

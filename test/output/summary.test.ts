@@ -8,6 +8,7 @@ const provenance = {
   version: '1.2.3',
   caseFile: 'tube.yaml',
   caseHash: 'ab'.repeat(32),
+  speciesFiles: [{ name: 'plant.yaml', hash: 'cd'.repeat(32) }],
   files: ['profile.csv', 'summary.json'],
 } as const;
 const summary = summarise(inventedResult, cooledBed, provenance, 0.25);

@@ -16,6 +16,7 @@ describe('key figures', () => {
       'conversion of A': '75 %',
       'selectivity and yield, B_2 from A': '90 %, 67.5 %',
       'selectivity and yield, A from B_2': 'none, 0 %',
+      'approach to equilibrium, second': '-2.0 K',
       'effectiveness of first': '0.5 / 0.45 / 0.6  inlet / mean / outlet',
       'effectiveness of second': '– / 1.25 / –  inlet / mean / outlet',
       'heat removed': '1.234 kW',

@@ -1,16 +1,16 @@
+import type * as z from 'zod';
 import type { Assumption } from '../../bed/reactor-specification.js';
 import { didYouMean } from '../../diagnostics/nearest-name.js';
 import { molarMassOf, parseChemicalFormula } from '../../properties/chemical-formula.js';
 import type { SpeciesRecord } from '../../properties/species-record.js';
-import { findLibrarySpecies, librarySpeciesIds } from '../../properties/species/library.js';
 import { keyProblemAt, locate, plainValue, problemAt, reportAt, type CaseContext } from '../case-context.js';
-import { readKeys } from '../read-section.js';
+import { readKeys, type SectionReading } from '../read-section.js';
 import { describeValue } from '../schema/leaves.js';
 import { speciesRecordSchema } from '../schema/species-schema.js';
 import { buildHeatCapacity, compareWithPolynomial } from './build-heat-capacity.js';
-
-/** `source` of a record that the case itself gives. */
-export const ownRecordSource = 'own record in the case';
+import { shiftPolynomials } from './shift-polynomials.js';
+import type { SpeciesLibraries } from './species-source.js';
+import { toProperty } from './to-property.js';
 
 const identifier = /^[A-Za-z][A-Za-z0-9_]*$/;
 /** Given and computed molar masses may differ by this much before it is worth a word. */
@@ -30,8 +30,17 @@ export function isIdentifier(text: string): boolean {
   return identifier.test(text) && text.length <= 60;
 }
 
-/** Reads the section `species`; undefined where there is none or it is no map. */
-export function buildSpecies(context: CaseContext, assumptions: Assumption[]): SpeciesSection | undefined {
+/**
+ * Reads the section `species` of a case or of a species file; undefined where there is none or it is no map.
+ *
+ * @param origin - how own records are to be named as a source, `own record in the case`
+ */
+export function buildSpecies(
+  context: CaseContext,
+  libraries: SpeciesLibraries,
+  origin: string,
+  assumptions: Assumption[],
+): SpeciesSection | undefined {
   const { node, isExact } = locate(context.root, ['species']);
   if (!isExact) return undefined;
   if (node.kind !== 'map' || node.entries.size === 0) {
@@ -52,6 +61,7 @@ export function buildSpecies(context: CaseContext, assumptions: Assumption[]): S
     });
     return undefined;
   }
+  const builder: RecordBuilder = { context, libraries, origin, assumptions };
   for (const id of node.entries.keys()) {
     if (!isIdentifier(id)) {
       keyProblemAt(context, ['species', id], {
@@ -62,16 +72,25 @@ export function buildSpecies(context: CaseContext, assumptions: Assumption[]): S
       continue;
     }
     ids.push(id);
-    records.push(buildRecord(context, id, assumptions));
+    records.push(buildRecord(builder, id));
   }
   return { ids, records };
 }
 
-function buildRecord(context: CaseContext, id: string, assumptions: Assumption[]): SpeciesRecord | undefined {
+/** What every record of one file is built with. */
+interface RecordBuilder {
+  readonly context: CaseContext;
+  readonly libraries: SpeciesLibraries;
+  readonly origin: string;
+  readonly assumptions: Assumption[];
+}
+
+function buildRecord(builder: RecordBuilder, id: string): SpeciesRecord | undefined {
+  const { context } = builder;
   const path = ['species', id];
   const { node } = locate(context.root, path);
-  if (node.kind === 'map') return ownRecord(context, id, assumptions);
-  if (node.kind === 'scalar' && node.value === 'library') return libraryRecord(context, id, assumptions);
+  if (node.kind === 'map') return ownRecord(builder, id);
+  if (node.kind === 'scalar' && node.value === 'library') return libraryRecord(builder, id, id, path);
   problemAt(context, path, {
     code: 'wrong_value',
     found: describeValue(plainValue(node)),
@@ -80,47 +99,57 @@ function buildRecord(context: CaseContext, id: string, assumptions: Assumption[]
   return undefined;
 }
 
+/** @param wanted - id in the library; `id` is that of the case */
 function libraryRecord(
-  context: CaseContext,
+  { context, libraries, assumptions }: RecordBuilder,
   id: string,
-  assumptions: Assumption[],
+  wanted: string,
+  path: readonly string[],
 ): SpeciesRecord | undefined {
-  const record = findLibrarySpecies(id);
-  if (record) {
+  const found = libraries.find(wanted);
+  if (found) {
+    const { record, library, hides } = found;
+    const name = wanted === id ? id : `${id}, as ${wanted},`;
     assumptions.push({
       about: `species.${id}`,
-      statement: `data of ${id} from the species library`,
+      statement: `data of ${name} from ${library}${hides === undefined ? '' : `, not those of ${hides}`}`,
       source: record.source,
     });
-    return record;
+    return { ...record, id };
   }
-  const mend = didYouMean(id, librarySpeciesIds());
-  problemAt(context, ['species', id], {
+  const mend = didYouMean(wanted, libraries.ids);
+  problemAt(context, path, {
     code: 'unknown_name',
-    found: `\`${id}\`, which the species library does not hold`,
+    found: `\`${wanted}\`, which the species library does not hold`,
     expected: 'an id of the library, or an own record with `formula` or `molar_mass`',
     ...(mend !== undefined && { mend }),
   });
   return undefined;
 }
 
-function ownRecord(context: CaseContext, id: string, assumptions: Assumption[]): SpeciesRecord | undefined {
+function ownRecord(builder: RecordBuilder, id: string): SpeciesRecord | undefined {
+  const { context, origin, assumptions } = builder;
   const path = ['species', id];
   const reading = readKeys(context, path, speciesRecordSchema);
   if (!reading) return undefined;
   const { values, isGiven } = reading;
-  const { formula, name, heat_of_formation, entropy, heat_capacity } = values;
+  const { formula, heat_of_formation, entropy, heat_capacity } = values;
+  const base =
+    values.from === undefined
+      ? undefined
+      : libraryRecord(builder, id, values.from === 'library' ? id : values.from, [...path, 'from']);
   const elements =
     formula === undefined
-      ? undefined
+      ? base?.elements
       : parseChemicalFormula(formula, reportAt(context, [...path, 'formula']));
-  const molarMass = resolveMolarMass(
+  const ownMass = resolveMolarMass(
     context,
     id,
-    { formula, elements, given: values.molar_mass },
+    { formula, elements: formula === undefined ? undefined : elements, given: values.molar_mass },
     assumptions,
   );
-  if (molarMass === undefined && !isGiven('molar_mass') && !isGiven('formula')) {
+  const molarMass = ownMass ?? base?.molarMass;
+  if (molarMass === undefined && !isGiven('molar_mass') && !isGiven('formula') && !isGiven('from')) {
     problemAt(context, path, {
       code: 'missing_property',
       found: `no \`molar_mass\` and no \`formula\` of ${id}`,
@@ -130,18 +159,75 @@ function ownRecord(context: CaseContext, id: string, assumptions: Assumption[]):
   const heatCapacity = heat_capacity && buildHeatCapacity(context, path, heat_capacity);
   compareWithPolynomial(context, path, heatCapacity, { enthalpy: heat_of_formation, entropy });
   const isSound =
-    reading.isSound && !(formula !== undefined && !elements) && !(heat_capacity && !heatCapacity);
+    reading.isSound &&
+    !(formula !== undefined && !elements) &&
+    !(heat_capacity && !heatCapacity) &&
+    !(isGiven('from') && !base) &&
+    isPairWhole(context, path, values);
   if (!isSound || molarMass === undefined) return undefined;
-  return {
+  const own = ownFields(values);
+  const record: SpeciesRecord = {
+    ...base,
+    ...own,
     id,
     molarMass,
-    source: ownRecordSource,
-    ...(name !== undefined && { name }),
     ...(elements && { elements }),
-    ...(heat_of_formation !== undefined && { enthalpyOfFormation: heat_of_formation }),
-    ...(entropy !== undefined && { standardEntropy: entropy }),
     ...(heatCapacity && { heatCapacity }),
+    source: base ? `${origin}, the rest from: ${base.source}` : origin,
   };
+  if (base) {
+    const changed = Object.keys(plainValue(locate(context.root, path).node) as object).filter(
+      (key) => key !== 'from',
+    );
+    if (changed.length > 0) {
+      assumptions.push({
+        about: `species.${id}`,
+        statement: `${changed.join(', ')} of ${id} as given, in place of the library’s`,
+        source: origin,
+      });
+    }
+  }
+  // Polynomials carry heat of formation and entropy inside them; an own polynomial has its own.
+  return heatCapacity ? record : shiftPolynomials(record, heat_of_formation, entropy);
+}
+
+type RecordValues = SectionReading<z.output<typeof speciesRecordSchema>>['values'];
+
+/** The fields that a record states itself, undefined ones left out. */
+function ownFields(values: RecordValues): Partial<SpeciesRecord> {
+  const fields = {
+    name: values.name,
+    enthalpyOfFormation: values.heat_of_formation,
+    standardEntropy: values.entropy,
+    criticalTemperature: values.critical_temperature,
+    criticalPressure: values.critical_pressure,
+    criticalVolume: values.critical_volume,
+    acentricFactor: values.acentric_factor,
+    dipoleMoment: values.dipole_moment,
+    associationFactor: values.association_factor,
+    diffusionVolume: values.diffusion_volume,
+    viscosity: values.viscosity && toProperty(values.viscosity),
+    thermalConductivity: values.thermal_conductivity && toProperty(values.thermal_conductivity),
+    lennardJones:
+      values.collision_diameter !== undefined && values.well_depth !== undefined
+        ? { collisionDiameter: values.collision_diameter, wellDepth: values.well_depth }
+        : undefined,
+  };
+  return Object.fromEntries(
+    Object.entries(fields).filter(([, value]) => value !== undefined),
+  ) as Partial<SpeciesRecord>;
+}
+
+/** Lennard-Jones constants come in pairs. */
+function isPairWhole(context: CaseContext, path: readonly string[], values: RecordValues): boolean {
+  const hasDiameter = values.collision_diameter !== undefined;
+  if (hasDiameter === (values.well_depth !== undefined)) return true;
+  problemAt(context, path, {
+    code: 'missing_property',
+    found: `no \`${hasDiameter ? 'well_depth' : 'collision_diameter'}\` beside \`${hasDiameter ? 'collision_diameter' : 'well_depth'}\``,
+    expected: 'both Lennard-Jones constants or neither',
+  });
+  return false;
 }
 
 /** kg/mol; the given one where there is one, compared with that of the formula. */

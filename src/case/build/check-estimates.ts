@@ -10,7 +10,7 @@ import { missingForConductivity } from '../../properties/transport/pure-gas-cond
 import { missingForViscosity } from '../../properties/transport/pure-gas-viscosity.js';
 import { transportMethods } from '../../properties/transport/transport-methods.js';
 import { problemAt, type CaseContext } from '../case-context.js';
-import { ownRecordSource } from './build-species.js';
+import { isOwnRecord } from './species-source.js';
 import { recordKeys } from './record-keys.js';
 
 /** One estimate of a case: whose data it needs, and what there is to say of it. */
@@ -41,7 +41,7 @@ export function checkEstimates(
         const key = `${record.id} ${field}`;
         if (reported.has(key)) continue;
         reported.add(key);
-        const where = record.source === ownRecordSource ? '' : ' in the species library';
+        const where = isOwnRecord(record) ? '' : ' in the species library';
         problemAt(context, ['species', record.id], {
           code: 'missing_property',
           found: `no \`${recordKeys[field]}\` of ${record.id}${where}`,

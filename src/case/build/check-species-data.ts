@@ -6,7 +6,8 @@ import type { SpeciesRecord } from '../../properties/species-record.js';
 import { createSpeciesThermochemistry } from '../../properties/thermochemistry.js';
 import { problemAt, type CaseContext, type CasePath } from '../case-context.js';
 import { complete } from './holes.js';
-import { ownRecordSource, type SpeciesSection } from './build-species.js';
+import type { SpeciesSection } from './build-species.js';
+import { isOwnRecord } from './species-source.js';
 
 /** The parts of a case that its species' data hang on. */
 export interface KnownParts {
@@ -51,7 +52,7 @@ function checkHeatData(context: CaseContext, parts: KnownParts): boolean {
     const key = `${record.id} ${property}`;
     if (reported.has(key)) return;
     reported.add(key);
-    const where = record.source === ownRecordSource ? '' : ' in the species library';
+    const where = isOwnRecord(record) ? '' : ' in the species library';
     problemAt(context, ['species', record.id], {
       code: 'missing_property',
       found: `no \`${property}\` of ${record.id}${where}`,
@@ -110,7 +111,7 @@ function checkSigns(context: CaseContext, parts: KnownParts): boolean {
     check(['fluid', 'heat_capacity'], 'heat capacity', value, per === 'mass' ? 'J/(kg K)' : 'J/(mol K)');
   }
   for (const record of species.records) {
-    if (!record?.heatCapacity || record.source !== ownRecordSource) continue;
+    if (!record?.heatCapacity || !isOwnRecord(record)) continue;
     const value = createSpeciesThermochemistry(record).heatCapacity(temperature);
     check(['species', record.id, 'heat_capacity'], 'heat capacity', value, 'J/(mol K)');
   }

@@ -4,7 +4,7 @@ import {
   delegate,
   describeValue,
   isMap,
-  later,
+  plainNumber,
   positive,
   property,
   quantity,
@@ -58,20 +58,71 @@ const heatCapacity: z.ZodType<HeatCapacityInput> = z
     quantity: ['heat_capacity_per_amount'],
   });
 
-/** An own record. */
+/** One debye, C m. @source 1e-18 esu cm; 1e-21/c C m with the SI speed of light, rounded */
+const debye = 3.33564e-30;
+
+const dipoleMoment = z
+  .unknown()
+  .transform((value, context): number => {
+    const number = typeof value === 'string' ? /^(\d+\.?\d*) +debye$/.exec(value)?.[1] : undefined;
+    const read = Number(number);
+    if (number !== undefined && read <= 20) return read * debye;
+    addFault(context, {
+      code: 'wrong_type',
+      found: describeValue(value),
+      expected: 'a dipole moment in debye, for example `1.47 debye`',
+    });
+    return z.NEVER;
+  })
+  .meta({ description: 'dipole moment in debye, as `1.47 debye`', type: 'string' });
+
+/** A record: whole, or what differs from that of a species of the library. */
 export const speciesRecordSchema = z.strictObject({
+  from: text(
+    '`library`, or the id of a species of the library whose data are taken where none are given',
+    60,
+  ).optional(),
   name: text('trade name', 200).optional(),
   molar_mass: positive('molarMass', 'molar mass; from the formula where absent').optional(),
   formula: text('chemical formula, for the element balance', 60).optional(),
   heat_of_formation: quantity('molarEnergy', 'enthalpy of formation, ideal gas, 298.15 K').optional(),
   entropy: positive('molarEntropy', 'standard entropy, ideal gas, 298.15 K, 1 bar').optional(),
   heat_capacity: heatCapacity.optional(),
-  critical_temperature: later('`critical_temperature`'),
-  critical_pressure: later('`critical_pressure`'),
-  critical_volume: later('`critical_volume`'),
-  acentric_factor: later('`acentric_factor`'),
-  dipole_moment: later('`dipole_moment`'),
-  diffusion_volume: later('`diffusion_volume`'),
-  viscosity: later('`viscosity` of a species'),
-  thermal_conductivity: later('`thermal_conductivity` of a species'),
+  critical_temperature: quantity('temperature', 'critical temperature', { above: 0 }).optional(),
+  critical_pressure: positive('pressure', 'critical pressure').optional(),
+  critical_volume: positive('molarVolume', 'critical volume').optional(),
+  acentric_factor: plainNumber('acentric factor', { atLeast: -1, atMost: 3 }).optional(),
+  dipole_moment: dipoleMoment.optional(),
+  association_factor: plainNumber('association factor of Chung et al.', { atLeast: 0, atMost: 1 }).optional(),
+  diffusion_volume: plainNumber('diffusion volume of Fuller, Schettler and Giddings', {
+    atLeast: 0.1,
+    atMost: 1e4,
+  }).optional(),
+  collision_diameter: positive('length', 'Lennard-Jones collision diameter').optional(),
+  well_depth: quantity('temperature', 'Lennard-Jones well depth over Boltzmann’s constant', {
+    above: 0,
+  }).optional(),
+  viscosity: property('viscosity', 'viscosity of the pure gas').optional(),
+  thermal_conductivity: property('thermalConductivity', 'thermal conductivity of the pure gas').optional(),
 });
+
+/** A plain file name, no folder, that is a YAML file and cannot be taken for another file of a result. */
+const fileName = /^(?!case\.ya?ml$)[A-Za-z0-9_][A-Za-z0-9._-]{0,99}\.ya?ml$/;
+
+export const speciesFilesSchema = z
+  .array(
+    z
+      .unknown()
+      .transform((value, context): string => {
+        if (typeof value === 'string' && fileName.test(value)) return value;
+        addFault(context, {
+          code: 'wrong_value',
+          found: describeValue(value),
+          expected: 'the name of a YAML file beside the case, without folders, and not `case.yaml`',
+        });
+        return z.NEVER;
+      })
+      .meta({ description: 'name of a species file beside the case', type: 'string' }),
+  )
+  .max(20)
+  .meta({ description: 'further species libraries, files beside the case' });
