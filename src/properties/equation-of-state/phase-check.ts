@@ -1,6 +1,6 @@
 /**
  * Would a liquid condense from a gas? The tangent-plane test: trial liquids W with ln W_i + ln φ_i(W) = ln y_i + ln φ_i(y), sought by
- * successive substitution, speeded up along its slowest direction. The gas is stable where none of them has amounts that sum to more than one.
+ * successive substitution, sped up along its slowest direction. The gas is stable where none of them has amounts that sum to more than one.
  *
  * Trials start from the liquid that Wilson's K-values give, and from each species pure below its critical temperature (water and oil may each
  * condense alone). Not sought: phases of two dense fluids above the critical temperature of every species present.
