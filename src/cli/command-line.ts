@@ -16,9 +16,13 @@ gravest counts: 1, then 2, then 3.
 Estimates for study under the supervision of qualified engineers; local codes and licensed
 practice govern.`;
 
-const commandNames = ['run', 'check', 'completion'];
+const commandNames = ['run', 'check', 'species', 'completion'];
 const commonOptions = ['--quiet', '--json', '--debug', '--help', '--version'];
-const runOptions = ['--out', '--charts', '--no-charts'];
+/** Options of one command alone, by its name. */
+const ownOptions: Readonly<Record<string, readonly string[]>> = {
+  run: ['--out', '--charts', '--no-charts'],
+  species: ['--from', '--to', '--step', '--out'],
+};
 
 /** What the command line asks for, once it is known to be without fault. */
 type Action = () => Promise<ExitStatus>;
@@ -77,7 +81,7 @@ function reword(message: string, words: readonly string[]): string {
   if (!commandNames.includes(first) && unknown.includes(first)) {
     return complain('command', first, commandNames);
   }
-  const known = first === 'run' ? [...commonOptions, ...runOptions] : commonOptions;
+  const known = [...commonOptions, ...(Object.hasOwn(ownOptions, first) ? ownOptions[first]! : [])];
   const asTyped = (name: string): string =>
     words.includes(name) ? name : `${name.length === 1 ? '-' : '--'}${name}`;
   return unknown.map((name) => complain('argument', asTyped(name), known)).join('\n');
@@ -134,6 +138,37 @@ function define(choose: (action: Action) => void, streams: Streams): Argv {
         choose(async () => {
           const { checkCommand } = await import('./check-command.js');
           return checkCommand({ cases, quiet, json, debug }, streams);
+        }),
+    )
+    .command(
+      'species [query]',
+      'list the species library, search it, or show one species with its properties',
+      (command) =>
+        command
+          .positional('query', {
+            type: 'string',
+            describe: 'id, name, formula or CAS number; all species where absent',
+          })
+          .option('from', { type: 'string', requiresArg: true, describe: 'lowest temperature: 300 K' })
+          .option('to', { type: 'string', requiresArg: true, describe: 'highest temperature' })
+          .option('step', { type: 'string', requiresArg: true, describe: 'step of the table: 50 K' })
+          .option('out', {
+            type: 'string',
+            requiresArg: true,
+            describe: 'folder for table and charts of one species',
+          })
+          .option('json', { type: 'boolean', default: false, describe: 'print as JSON' })
+          .option('debug', { type: 'boolean', default: false, describe: 'show where a defect happened' })
+          .example('$0 species ammonia', 'everything known of ammonia')
+          .example('$0 species NH3 --to 1500 K --out ammonia', 'its table and charts in ammonia/'),
+      ({ query, from, to, step, out, json }) =>
+        choose(async () => {
+          for (const [name, value] of Object.entries({ query, from, to, step, out })) {
+            if (Array.isArray(value)) throw new UsageError(`Give --${name} once.`);
+          }
+          if (out === '') throw new UsageError('--out names no folder.');
+          const { speciesCommand } = await import('./species-command.js');
+          return speciesCommand({ query, from, to, step, out, json }, streams);
         }),
     )
     .completion('completion', 'print a script for shell completion')

@@ -1,6 +1,14 @@
 /** Every case of the project's folder from file to results. */
 import { createHash } from 'node:crypto';
-import { mkdtempSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import {
+  existsSync,
+  mkdtempSync,
+  readdirSync,
+  readFileSync,
+  rmSync,
+  symlinkSync,
+  writeFileSync,
+} from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
@@ -110,5 +118,28 @@ describe('run', () => {
       species_files: {},
       files: ['profile.csv', 'pellet.csv', 'case.yaml', 'summary.json'],
     });
+  });
+
+  it('copies species files beside the case, with their hash; a link in their place is refused', async () => {
+    const path = join(folder, 'plant.yaml');
+    const species = join(folder, 'own.yaml');
+    const text = readFileSync(quickCase, 'utf8');
+    writeFileSync(path, `${text}\nspecies_files: [own.yaml]\n`);
+    writeFileSync(species, 'bedwright_species: 1\nspecies: { X: { formula: C3H8O } }\n');
+    const target = join(folder, 'result');
+    expect((await run('run', path, '--out', target, '--no-charts')).status).toBe(0);
+    expect(readFileSync(join(target, 'own.yaml')).equals(readFileSync(species))).toBe(true);
+    expect(summaryOf(target).provenance['species_files']).toEqual({
+      'own.yaml': createHash('sha256').update(readFileSync(species)).digest('hex'),
+    });
+    // The copy runs on its own.
+    const again = await run('run', join(target, 'case.yaml'), '--out', join(folder, 'again'), '--no-charts');
+    expect(again.status).toBe(0);
+    rmSync(species);
+    symlinkSync('/etc/hostname', species);
+    const refused = await run('run', path, '--out', join(folder, 'linked'), '--no-charts');
+    expect(refused.status).toBe(2);
+    expect(refused.error).toContain('symbolic link');
+    expect(existsSync(join(folder, 'linked'))).toBe(false);
   });
 });

@@ -356,6 +356,14 @@ export const libraryEntries: readonly LibraryEntry[] = [
     diffusionVolume: [13.1, 'fuller'],
     associationFactor: [0.0759, 'chung', 'from memory'],
     lennardJones: { source: 'svehla', collisionDiameter: 2.641, wellDepth: 809.1 },
+    viscosity: [
+      '1e-4 Pa s * sqrt(T / 647.096 K) / (1.67752 + 2.20462 * (647.096 K / T) + 0.6366564 * (647.096 K / T)^2 - 0.241605 * (647.096 K / T)^3)',
+      'steamViscosity',
+    ],
+    thermalConductivity: [
+      '1e-3 W/(m K) * sqrt(T / 647.096 K) / (2.443221e-3 + 1.323095e-2 * (647.096 K / T) + 6.770357e-3 * (647.096 K / T)^2 - 3.454586e-3 * (647.096 K / T)^3 + 4.096266e-4 * (647.096 K / T)^4)',
+      'steamConductivity',
+    ],
   },
   {
     id: 'CH4',

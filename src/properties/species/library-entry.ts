@@ -6,6 +6,9 @@ export type LibraryQuality = 'from memory' | 'computed' | 'estimated';
 /** A number, where it comes from, and a caution where it is not a measured value read in its source. */
 export type LibraryValue = readonly [value: number, source: LibrarySourceKey, quality?: LibraryQuality];
 
+/** A property as a formula in T, and where it comes from. */
+export type LibraryFormula = readonly [text: string, source: LibrarySourceKey];
+
 /** One temperature range of a nine-constant polynomial; it begins where the one before ends. */
 export interface LibraryRange {
   /** K */
@@ -64,5 +67,8 @@ export interface LibraryEntry {
     readonly collisionDiameter: number;
     readonly wellDepth: number;
   };
+  /** Of the dilute gas as formulas in T, where corresponding states do badly; in the notation of case files. */
+  readonly viscosity?: LibraryFormula;
+  readonly thermalConductivity?: LibraryFormula;
   readonly cautions?: readonly string[];
 }

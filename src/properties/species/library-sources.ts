@@ -13,6 +13,10 @@ export const librarySources = {
   boilingPoints:
     'CRC Handbook physical-constants tables / NIST WebBook / saturation line of the reference equation of state',
   fuller: 'Fuller, Ensley & Giddings, J. Phys. Chem. 73 (1969) 3679; Poling et al. 5th ed. Table 11-1',
+  steamViscosity:
+    'IAPWS R12-08 (2008), viscosity of ordinary water substance, dilute gas (constants from memory)',
+  steamConductivity:
+    'IAPWS R15-11 (2011), thermal conductivity of ordinary water substance, dilute gas (constants from memory)',
   svehla: 'Svehla, NASA TR R-132 (1962), as in Poling et al. 5th ed. App. B',
   leachman: 'Leachman et al., J. Phys. Chem. Ref. Data 38 (2009) 721',
   span2000: 'Span et al., J. Phys. Chem. Ref. Data 29 (2000) 1361',

@@ -1,6 +1,8 @@
+import { parseFormula } from '../../expressions/parse-formula.js';
+import type { FluidProperty } from '../fluid-property.js';
 import type { SpeciesRecord } from '../species-record.js';
 import { libraryEntries } from './library-data.js';
-import type { LibraryEntry } from './library-entry.js';
+import type { LibraryEntry, LibraryFormula } from './library-entry.js';
 import { librarySources } from './library-sources.js';
 
 /** Powers of T in the nine-constant form. @source McBride, Zehe & Gordon, NASA/TP-2002-211556 (2002), eq. 1 */
@@ -61,8 +63,21 @@ function toSpeciesRecord(entry: LibraryEntry): SpeciesRecord {
         wellDepth: entry.lennardJones.wellDepth,
       },
     }),
+    ...(entry.viscosity && { viscosity: toFormula(entry.viscosity) }),
+    ...(entry.thermalConductivity && { thermalConductivity: toFormula(entry.thermalConductivity) }),
     source: describeSource(entry),
   };
+}
+
+function toFormula([text]: LibraryFormula): FluidProperty {
+  const formula = parseFormula(
+    text,
+    { constants: new Map(), speciesIds: [], allowsTemperature: true, allowsPressure: false },
+    ({ found }) => {
+      throw new Error(`the species library has a formula at fault: ${found}`);
+    },
+  );
+  return { kind: 'formula', formula: formula! };
 }
 
 /** One line: the polynomials' source, and the heat of formation's where it is another. */

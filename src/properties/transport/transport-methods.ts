@@ -7,7 +7,7 @@ export interface MethodNote {
 export const transportMethods = {
   viscosity: {
     statement:
-      'viscosity of the mixture: gases by corresponding states with polar and association corrections (hydrogen and helium by their Lennard-Jones constants), mixed after Wilke; dilute gas, about 0.7 Tc upwards; 2 % non-polar, 5 % and more polar and in mixtures with hydrogen',
+      'viscosity of the mixture: gases by corresponding states with polar and association corrections (hydrogen and helium by their Lennard-Jones constants, steam by a formula of its own), mixed after Wilke; dilute gas, about 0.7 Tc upwards; 2 % non-polar, 5 % and more polar and in mixtures with hydrogen',
     source:
       'Chung, Ajlan, Lee & Starling (1988), Ind. Eng. Chem. Res. 27, 671; Wilke (1950), J. Chem. Phys. 18, 517',
   },
