@@ -172,11 +172,12 @@ export function createEquilibrium(input: EquilibriumInput): Equilibrium {
       );
       const lowest = Math.max(...used.map((entry) => entry.lowestTemperature));
       const highest = Math.min(...used.map((entry) => entry.highestTemperature));
-      let isSound = true;
+      let failures = 0;
+      const hasFailed = (): boolean => failures > 0;
       const excess = (temperature: number): number => {
         const state = atTemperature(amounts, temperature, pressure);
         if (!state) {
-          isSound = false;
+          failures++;
           return 0;
         }
         return enthalpyOf(state.amounts, temperature, pressure) - target;
@@ -184,11 +185,11 @@ export function createEquilibrium(input: EquilibriumInput): Equilibrium {
       // Enthalpy at equilibrium rises with temperature (Le Chatelier), so that one bracket holds one root.
       const atFeed = excess(feedTemperature);
       const end = atFeed > 0 ? lowest : highest;
-      if (!isSound || !Number.isFinite(atFeed) || !Number.isFinite(end)) return undefined;
+      if (hasFailed() || !Number.isFinite(atFeed) || !Number.isFinite(end)) return undefined;
       const atEnd = excess(end);
-      if (!isSound || !(atFeed * atEnd <= 0)) return undefined;
+      if (hasFailed() || !(atFeed * atEnd <= 0)) return undefined;
       const { root } = findRoot(excess, feedTemperature, end, temperatureTolerance * feedTemperature);
-      return isSound ? atTemperature(amounts, root, pressure) : undefined;
+      return hasFailed() ? undefined : atTemperature(amounts, root, pressure);
     },
   };
 }
@@ -254,7 +255,7 @@ function newtonStep(
   const pivots = new Int32Array(size);
   if (!factoriseInPlace(matrix, size, pivots)) return undefined;
   solveInPlace(matrix, size, pivots, right);
-  const totalChange = right[last]! * scales[last]!;
+  const totalChange = right[last] * scales[last]!;
   const changes = new Float64Array(count);
   for (let a = 0; a < count; a++) {
     let value = totalChange - potentials[a]!;
@@ -299,7 +300,7 @@ function largestResidual(
   for (const row of reactions) {
     let sum = 0;
     let size = 0;
-    let isVanished = false;
+    let isVanished = false as boolean;
     row.forEach((coefficient, a) => {
       if (coefficient === 0) return;
       if (logs[a]! <= lowestLogAmount) isVanished = true;
