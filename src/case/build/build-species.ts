@@ -213,9 +213,7 @@ function ownFields(values: RecordValues): Partial<SpeciesRecord> {
         ? { collisionDiameter: values.collision_diameter, wellDepth: values.well_depth }
         : undefined,
   };
-  return Object.fromEntries(
-    Object.entries(fields).filter(([, value]) => value !== undefined),
-  ) as Partial<SpeciesRecord>;
+  return Object.fromEntries(Object.entries(fields).filter(([, value]) => value !== undefined));
 }
 
 /** Lennard-Jones constants come in pairs. */
