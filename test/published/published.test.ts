@@ -7,6 +7,7 @@ import { poreDiffusionRows } from './pore-diffusion.js';
 import { pressureDropRows } from './pressure-drop.js';
 import { missRatio, type PublishedRow } from './published-row.js';
 import { reactorRows } from './reactor.js';
+import { transportRows } from './transport.js';
 
 const areas: Readonly<Record<string, readonly PublishedRow[]>> = {
   pellet: pelletRows,
@@ -15,6 +16,7 @@ const areas: Readonly<Record<string, readonly PublishedRow[]>> = {
   'pressure drop': pressureDropRows,
   kinetics: kineticsRows,
   equilibrium: equilibriumRows,
+  transport: transportRows,
   reactor: reactorRows,
 };
 

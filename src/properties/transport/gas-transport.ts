@@ -85,7 +85,14 @@ export function createGasTransport(options: GasTransportOptions): GasTransport {
       const dilute = mixWithFactors(moleFractions, viscosities, denominators);
       if (!pseudoCritical) return dilute;
       const critical = pseudoCritical(moleFractions);
-      return dilute * lucasPressureFactor(temperature / critical.temperature, pressure / critical.pressure);
+      return (
+        dilute *
+        lucasPressureFactor(
+          temperature / critical.temperature,
+          pressure / critical.pressure,
+          critical.polarFactor,
+        )
+      );
     },
     conductivity(moleFractions, temperature, _pressure, molarDensity) {
       prepare(moleFractions, temperature);

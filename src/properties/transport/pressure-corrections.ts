@@ -6,11 +6,16 @@ import type { PseudoCritical } from './pseudo-critical.js';
  *
  * @param reducedTemperature - T/Tc of the mixture; below 1 the value at 1 is taken, the method's form for subcooled vapour being another
  * @param reducedPressure - P/Pc, 0 to 100
- * @source Lucas (1980, 1981), Chem. Ing. Tech. 53, 959; as in Poling, Prausnitz & O'Connell, 5th ed. (2001), eq. 9-6.8, without its polar and
- *   quantum factors at pressure
+ * @param polarFactor - of the mixture at low pressure, 1 where nothing is polar
+ * @source Lucas (1980, 1981), Chem. Ing. Tech. 53, 959; as in Poling, Prausnitz & O'Connell, 5th ed. (2001), sec. 9-6; without the factor for quantum
+ *   gases at pressure, which is within 1 % of one
  * @range 1 < Tr < 40, Pr < 100; about 5 % non-polar, 10 % polar
  */
-export function lucasPressureFactor(reducedTemperature: number, reducedPressure: number): number {
+export function lucasPressureFactor(
+  reducedTemperature: number,
+  reducedPressure: number,
+  polarFactor: number,
+): number {
   if (!(reducedPressure > 0)) return 1;
   const t = Math.max(reducedTemperature, 1);
   const p = reducedPressure;
@@ -19,7 +24,8 @@ export function lucasPressureFactor(reducedTemperature: number, reducedPressure:
   const c = (0.4489 / t) * Math.exp(3.0578 * t ** -37.7332);
   const d = (1.7368 / t) * Math.exp(2.231 * t ** -7.6351);
   const f = 0.9425 * Math.exp(-0.1853 * t ** 0.4489);
-  return 1 + (a * p ** 1.3088) / (b * p ** f + 1 / (1 + c * p ** d));
+  const plain = 1 + (a * p ** 1.3088) / (b * p ** f + 1 / (1 + c * p ** d));
+  return (plain * (1 + (polarFactor - 1) / plain ** 3)) / polarFactor;
 }
 
 /**

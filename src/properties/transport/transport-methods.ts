@@ -38,7 +38,7 @@ export const transportMethods = {
   },
   viscosityAtPressure: {
     statement:
-      'viscosity corrected for pressure by the reduced temperature and pressure of the mixture, without polar and quantum factors; reduced temperature above 1; 5 to 10 %',
+      'viscosity corrected for pressure by the reduced temperature and pressure of the mixture; reduced temperature above 1; 5 % non-polar, 10 % polar',
     source: 'Lucas (1981), Chem. Ing. Tech. 53, 959',
   },
   conductivityAtPressure: {
