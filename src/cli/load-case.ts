@@ -38,7 +38,7 @@ export function loadCase(path: string): LoadedCase {
       }
       const content = readBytes(beside);
       speciesFiles.push({ name, bytes: content, hash: hashOf(content) });
-      return decodeCase(content, beside);
+      return { fileName: beside, source: decodeCase(content, beside) };
     },
   });
   return { ...read, fileName: basename(path), bytes, source, hash: hashOf(bytes), speciesFiles };

@@ -1,21 +1,32 @@
 /** Species libraries of the user's own: files beside the case with records like those of a case. */
 import { CaseError } from '../../diagnostics/case-error.js';
 import type { Problem } from '../../diagnostics/problem.js';
-import type { SpeciesRecord } from '../../properties/species-record.js';
+import type { Assumption } from '../../bed/reactor-specification.js';
 import { problemAt, type CaseContext } from '../case-context.js';
 import { readSection, reportUnknownKey } from '../read-section.js';
 import { speciesFilesSchema } from '../schema/species-schema.js';
 import { readYamlDocument } from '../yaml-document.js';
 import { buildSpecies } from './build-species.js';
 import { complete } from './holes.js';
-import { createSpeciesLibraries, ownRecordSource, type SpeciesLibraries } from './species-source.js';
+import {
+  createSpeciesLibraries,
+  ownRecordSource,
+  type FileSpecies,
+  type SpeciesLibraries,
+} from './species-source.js';
+
+/** Text of a species file, and its name as it is to appear in messages. */
+export interface SpeciesFileText {
+  readonly fileName: string;
+  readonly source: string;
+}
 
 /**
- * Text of a file beside the case, by its plain name; the caller guards where it reads.
+ * Finds a file beside the case by its plain name; the caller guards where it reads.
  *
  * @throws CaseError where there is no such file or it may not be read
  */
-export type ReadSpeciesFile = (name: string) => string;
+export type ReadSpeciesFile = (name: string) => SpeciesFileText;
 
 const formatVersion = 1;
 const knownKeys = ['bedwright_species', 'species', 'notes'] as const;
@@ -26,7 +37,7 @@ export function readSpeciesLibraries(
   readFile: ReadSpeciesFile | undefined,
 ): SpeciesLibraries {
   const names = readSection(context, ['species_files'], speciesFilesSchema) ?? [];
-  const files = new Map<string, ReadonlyMap<string, SpeciesRecord>>();
+  const files = new Map<string, ReadonlyMap<string, FileSpecies>>();
   names.forEach((name, index) => {
     if (files.has(name)) {
       problemAt(context, ['species_files', index], {
@@ -44,9 +55,24 @@ export function readSpeciesLibraries(
       });
       return;
     }
-    files.set(name, readSpeciesFile(name, readFile(name)));
+    const { records, warnings } = readSpeciesFile(name, readFile(name));
+    files.set(name, records);
+    for (const { code, path, found, expected, mend } of warnings) {
+      problemAt(context, ['species_files', index], {
+        code,
+        severity: 'warning',
+        found: `in ${name}, ${path}, ${found}`,
+        expected,
+        ...(mend !== undefined && { mend }),
+      });
+    }
   });
   return createSpeciesLibraries(files);
+}
+
+interface ReadFile {
+  readonly records: ReadonlyMap<string, FileSpecies>;
+  readonly warnings: readonly Problem[];
 }
 
 /**
@@ -54,20 +80,20 @@ export function readSpeciesLibraries(
  *
  * @throws CaseError with every problem of that file, when any of them is an error
  */
-export function readSpeciesFile(name: string, source: string): ReadonlyMap<string, SpeciesRecord> {
+function readSpeciesFile(name: string, { fileName, source }: SpeciesFileText): ReadFile {
   const problems: Problem[] = [];
   const report = (problem: Problem): void => {
     problems.push(problem);
   };
   const root = readYamlDocument(source, report);
-  const section = root && readRecords({ source, root, report }, name);
-  if (problems.some(({ severity }) => severity === 'error') || !section) {
-    throw new CaseError(name, source, problems);
+  const records = root && readRecords({ source, root, report }, name);
+  if (problems.some(({ severity }) => severity === 'error') || !records) {
+    throw new CaseError(fileName, source, problems);
   }
-  return section;
+  return { records, warnings: problems };
 }
 
-function readRecords(context: CaseContext, name: string): Map<string, SpeciesRecord> | undefined {
+function readRecords(context: CaseContext, name: string): Map<string, FileSpecies> | undefined {
   const { root } = context;
   if (root.kind !== 'map') {
     problemAt(context, [], {
@@ -92,13 +118,27 @@ function readRecords(context: CaseContext, name: string): Map<string, SpeciesRec
     problemAt(context, [], { code: 'missing_key', found: 'no `species`', expected: 'the section `species`' });
     return undefined;
   }
-  // The files of one case do not see each other; what a record takes from the built-in library is said where it is used.
+  const assumptions: Assumption[] = [];
+  // The files of one case do not see each other.
   const section = buildSpecies(
     context,
     createSpeciesLibraries(new Map()),
     `${ownRecordSource} in ${name}`,
-    [],
+    assumptions,
   );
   const records = section && complete(section.records);
-  return records && new Map(section.ids.map((id, index) => [id, records[index]!]));
+  return (
+    records &&
+    new Map(
+      section.ids.map((id, index) => [
+        id,
+        { record: records[index]!, assumptions: assumptions.filter(({ about }) => isAbout(about, id)) },
+      ]),
+    )
+  );
+}
+
+/** Whether an assumption is one about a species or a property of it. */
+function isAbout(about: string, id: string): boolean {
+  return about === `species.${id}` || about.startsWith(`species.${id}.`);
 }

@@ -1,4 +1,5 @@
 /** Where the records of a case's species come from, by id. */
+import type { Assumption } from '../../bed/reactor-specification.js';
 import type { SpeciesRecord } from '../../properties/species-record.js';
 import { findLibrarySpecies, librarySpeciesIds } from '../../properties/species/library.js';
 
@@ -12,15 +13,23 @@ export interface FoundSpecies {
   readonly record: SpeciesRecord;
   /** As it is to be named: `the species library`, or a file. */
   readonly library: string;
-  /** Whether another library holds the id too. */
+  /** The library further down that holds the id too. */
   readonly hides?: string;
+  /** What was taken for granted when the record was made. */
+  readonly assumptions: readonly Assumption[];
+}
+
+/** A record of a species file. */
+export interface FileSpecies {
+  readonly record: SpeciesRecord;
+  readonly assumptions: readonly Assumption[];
 }
 
 const builtIn = 'the species library';
 
 /** @param files - records by id, by the name of their file; the first that holds an id wins */
 export function createSpeciesLibraries(
-  files: ReadonlyMap<string, ReadonlyMap<string, SpeciesRecord>>,
+  files: ReadonlyMap<string, ReadonlyMap<string, FileSpecies>>,
 ): SpeciesLibraries {
   return {
     ids: [
@@ -29,11 +38,11 @@ export function createSpeciesLibraries(
     find(id) {
       const found: FoundSpecies[] = [];
       for (const [library, records] of files) {
-        const record = records.get(id);
-        if (record) found.push({ record, library });
+        const species = records.get(id);
+        if (species) found.push({ ...species, library });
       }
       const own = findLibrarySpecies(id);
-      if (own) found.push({ record: own, library: builtIn });
+      if (own) found.push({ record: own, library: builtIn, assumptions: [] });
       const [first, second] = found;
       return first && (second ? { ...first, hides: second.library } : first);
     },

@@ -61,16 +61,19 @@ const heatCapacity: z.ZodType<HeatCapacityInput> = z
 /** One debye, C m. @source 1e-18 esu cm; 1e-21/c C m with the SI speed of light, rounded */
 const debye = 3.33564e-30;
 
+/** Debye. Volatile molecules stay below 5, ion pairs in the gas phase about 12. @source common knowledge, from memory */
+const largestDipole = 20;
+
 const dipoleMoment = z
   .unknown()
   .transform((value, context): number => {
     const number = typeof value === 'string' ? /^(\d+\.?\d*) +debye$/.exec(value)?.[1] : undefined;
     const read = Number(number);
-    if (number !== undefined && read <= 20) return read * debye;
+    if (number !== undefined && read <= largestDipole) return read * debye;
     addFault(context, {
       code: 'wrong_type',
       found: describeValue(value),
-      expected: 'a dipole moment in debye, for example `1.47 debye`',
+      expected: `a dipole moment in debye, at most ${largestDipole}, for example \`1.47 debye\``,
     });
     return z.NEVER;
   })
@@ -107,7 +110,7 @@ export const speciesRecordSchema = z.strictObject({
 });
 
 /** A plain file name, no folder, that is a YAML file and cannot be taken for another file of a result. */
-const fileName = /^(?!case\.ya?ml$)[A-Za-z0-9_][A-Za-z0-9._-]{0,99}\.ya?ml$/;
+const fileName = /^(?!case\.ya?ml$)[a-z0-9_][a-z0-9._-]{0,99}\.ya?ml$/i;
 
 export const speciesFilesSchema = z
   .array(

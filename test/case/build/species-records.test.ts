@@ -16,7 +16,7 @@ heat: {mode: isothermal}
 `;
 
 const reads = (text: string, files: Readonly<Record<string, string>> = {}): ReadCase =>
-  readCase(text, 'case.yaml', { readSpeciesFile: (name) => files[name]! });
+  readCase(text, 'case.yaml', { readSpeciesFile: (name) => ({ fileName: name, source: files[name]! }) });
 const firstSpecies = (species: string, files?: Readonly<Record<string, string>>): SpeciesRecord =>
   reads(caseWith(species, files ? `species_files: [${Object.keys(files).join(', ')}]\n` : ''), files)
     .specification.species[0]!;
