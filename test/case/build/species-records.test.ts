@@ -57,10 +57,41 @@ describe('own records', () => {
     expect(problems.map(({ code, path }) => `${code} ${path}`)).toEqual(['missing_property species.A']);
   });
 
-  it('a dipole moment asks for its unit', () => {
-    const { problems } = faults(caseWith('{A: {formula: C2H4, dipole_moment: 1.5}, B: {formula: C2H4}}'));
-    expect(problems[0]!.path).toBe('species.A.dipole_moment');
-    expect(problems[0]!.expected).toContain('debye');
+  it.each(['1.5', '-1 debye', '25 debye', '1.5 D', '[1.5 debye]'])(
+    'a dipole moment of %s is refused',
+    (text) => {
+      const { problems } = faults(
+        caseWith(`{A: {formula: C2H4, dipole_moment: ${text}}, B: {formula: C2H4}}`),
+      );
+      expect(problems.map(({ path }) => path)).toEqual(['species.A.dipole_moment']);
+      expect(problems[0]!.expected).toContain('debye');
+    },
+  );
+
+  it.each([
+    ['a viscosity in the unit of a diffusivity', 'viscosity: 1e-5 m^2/s', 'wrong_dimension', 'viscosity'],
+    ['a critical pressure without unit', 'critical_pressure: 50', 'missing_unit', 'critical_pressure'],
+    ['a critical temperature of zero', 'critical_temperature: 0 K', 'out_of_range', 'critical_temperature'],
+    ['a critical volume per mass', 'critical_volume: 3 cm^3/g', 'wrong_dimension', 'critical_volume'],
+    [
+      'a well depth in joules',
+      'well_depth: 3e-21 J, collision_diameter: 4 angstrom',
+      'wrong_dimension',
+      'well_depth',
+    ],
+    ['an acentric factor with a unit', 'acentric_factor: 0.3 K', 'wrong_type', 'acentric_factor'],
+    [
+      'a conductivity formula in other units',
+      'thermal_conductivity: 1 W/m * T',
+      'wrong_dimension',
+      'thermal_conductivity',
+    ],
+    ['a formula that names a species', 'viscosity: 1e-5 Pa s * T / 300 K * y.A', 'bad_formula', 'viscosity'],
+  ])('%s is refused', (_what, text, code, key) => {
+    const { problems } = faults(caseWith(`{A: {formula: C2H4, ${text}}, B: {formula: C2H4}}`));
+    expect(problems.map((problem) => `${problem.code} ${problem.path}`)).toEqual([
+      `${code} species.A.${key}`,
+    ]);
   });
 });
 
@@ -106,6 +137,28 @@ describe('records that change one of the library', () => {
     ).toBe(true);
   });
 
+  it('change one Lennard-Jones constant alone where the library holds both', () => {
+    const { lennardJones } = firstSpecies('{A: {from: N2, well_depth: 95 K}, B: {from: N2}}');
+    expect(lennardJones).toEqual({ ...findLibrarySpecies('N2')!.lennardJones, wellDepth: 95 });
+  });
+
+  it('with polynomials of their own, leave the library’s heat of formation and entropy out', () => {
+    const own =
+      '{from: N2, heat_capacity: {nasa: [{from: 200 K, to: 3000 K, coefficients: [3.5, 0, 0, 0, 0, 2000, 4]}]}}';
+    const record = firstSpecies(`{A: ${own}, B: {from: N2}}`);
+    expect(record.enthalpyOfFormation).toBeUndefined();
+    // H/R = 3.5 T + 2000 K, with the molar gas constant of the SI.
+    const enthalpy = createSpeciesThermochemistry(record).enthalpy(298.15);
+    expect(enthalpy / (8.31446261815324 * (3.5 * 298.15 + 2000))).toBeCloseTo(1, 10);
+  });
+
+  it('keep the library’s heat of formation beside a heat capacity of their own', () => {
+    const record = firstSpecies('{A: {from: methanol, heat_capacity: 50 J/(mol K)}, B: {from: methanol}}');
+    const thermochemistry = createSpeciesThermochemistry(record);
+    expect(thermochemistry.enthalpy(298.15)).toBeCloseTo(library.enthalpyOfFormation!, 6);
+    expect(thermochemistry.enthalpy(398.15) - thermochemistry.enthalpy(298.15)).toBeCloseTo(5000, 6);
+  });
+
   it('an unknown id is refused with the nearest one', () => {
     const { problems } = faults(caseWith('{A: {from: methanoll}, B: {from: methanol}}'));
     expect(problems.map(({ code, path }) => `${code} ${path}`)).toEqual(['unknown_name species.A.from']);
@@ -141,26 +194,26 @@ species:
     expect(record.enthalpyOfFormation).toBe(-272e3);
   });
 
-  it.each([
-    ['a fault in a record', plant.replace('C3H8O', 'C3H8Zz'), /species\.A\.formula/],
-    [
-      'a typing error in a key',
-      plant.replace('heat_of_formation', 'heat_of_fromation'),
-      /species\.A\.heat_of_fromation/,
-    ],
-    ['no version', plant.replace('bedwright_species: 1\n', ''), /^$/],
-    ['another version', plant.replace('_species: 1', '_species: 7'), /^bedwright_species$/],
-    ['no species', 'bedwright_species: 1\n', /^$/],
-    ['a key that does not belong', `${plant}feed: 1\n`, /^feed$/],
-    ['a list', '- 1\n', /^$/],
-    ['an alias', plant.replace('N2: {', 'N2: &a {'), /.*/],
-    ['an id that is a prototype’s name', plant.replace('N2:', '__proto__:'), /species\.__proto__/],
-  ])('%s is reported in the file it stands in', (_what, text, path) => {
-    const error = faults(caseWith('{A: library, B: {formula: C3H8O}}', 'species_files: [plant.yaml]\n'), {
-      'plant.yaml': text,
-    });
-    expect(error.fileName).toBe('plant.yaml');
-    expect(error.problems[0]!.path).toMatch(path);
+  it('bring their assumptions along, under the id of the case', () => {
+    const { assumptions } = reads(
+      caseWith('{A: {from: N2}, B: {from: N2}}', 'species_files: [plant.yaml]\n'),
+      { 'plant.yaml': plant },
+    ).specification;
+    const statements = assumptions
+      .filter(({ about }) => about === 'species.A')
+      .map(({ statement }) => statement);
+    expect(statements).toContain(
+      'in plant.yaml, heat_of_formation of N2 as given, in place of the library’s',
+    );
+  });
+
+  it('bring their warnings along, at their name in the case', () => {
+    const { warnings } = reads(
+      caseWith('{A: library, B: {formula: C3H8O}}', 'species_files: [plant.yaml]\n'),
+      { 'plant.yaml': plant.replace('C3H8O,', 'C3H8O, molar_mass: 61 g/mol,') },
+    );
+    expect(warnings.map(({ code, path }) => `${code} ${path}`)).toEqual(['inconsistent species_files[0]']);
+    expect(warnings[0]!.found).toMatch(/^in plant\.yaml, species\.A\.molar_mass, /);
   });
 
   it.each([
@@ -169,6 +222,7 @@ species:
     'sub/plant.yaml',
     'plant.txt',
     'case.yaml',
+    'CASE.YAML',
     '.hidden.yaml',
     'a\\b.yaml',
   ])('a name such as %s is refused', (name) => {
