@@ -30,13 +30,17 @@ export const importTable: readonly FolderRule[] = [
     holds: 'formulas: text to a checked tree, derivatives, generated code',
     packages: ['mathjs'],
   },
-  { folder: 'properties', holds: 'species data, thermochemistry, fluid properties', packages: [] },
+  {
+    folder: 'properties',
+    holds: 'species data, thermochemistry, equilibrium, equations of state, transport properties',
+    packages: [],
+  },
   {
     folder: 'kinetics',
     holds: 'reaction equations, element balance, rate laws compiled, independent reactions',
     packages: ['ml-matrix'],
   },
-  { folder: 'pellet', holds: 'shapes, reaction and diffusion in one pellet, film', packages: [] },
+  { folder: 'pellet', holds: 'shapes, pores, reaction and diffusion in one pellet, film', packages: [] },
   { folder: 'bed', holds: 'axial balances, friction, heat, events, the result', packages: [] },
   {
     folder: 'case',
