@@ -84,7 +84,8 @@ function temperaturesOf(species: SpeciesFacts, options: SpeciesOptions): number[
   const [lowest, highest] = species.temperatureRange;
   const from = options.from === undefined ? Math.max(usualRange.from, lowest) : kelvin('from', options.from);
   const to = options.to === undefined ? Math.min(usualRange.to, highest) : kelvin('to', options.to);
-  const step = options.step === undefined ? usualRange.step : kelvin('step', options.step);
+  const step =
+    options.step === undefined ? usualRange.step : kelvin('step', options.step, 'temperatureDifference');
   for (const [name, value] of [
     ['from', from],
     ['to', to],
@@ -106,11 +107,15 @@ function drawnTemperatures(table: Float64Array): number[] {
   return Array.from({ length: drawnPoints }, (_, k) => from + ((to - from) * k) / (drawnPoints - 1));
 }
 
-/** A temperature with its unit, K; a step is one too, on the kelvin scale. */
-function kelvin(name: string, text: string): number {
-  const read = parseQuantity(text, [quantityKinds.temperature], ({ found, expected }) => {
+/** A temperature or a difference of temperatures with its unit, in K. */
+function kelvin(
+  name: string,
+  text: string,
+  kind: 'temperature' | 'temperatureDifference' = 'temperature',
+): number {
+  const read = parseQuantity(text, [quantityKinds[kind]], ({ found, expected }) => {
     throw new UsageError(`--${name}: found ${found}; expected ${expected}.`);
   });
-  if (!read) throw new UsageError(`--${name}: ${text} is no temperature.`);
+  if (!read) throw new Error('a quantity came to nothing without a reported fault');
   return read.value;
 }

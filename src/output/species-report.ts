@@ -9,6 +9,27 @@ import { bullet, significant, table, wrap } from './terminal-report.js';
 
 const lineWidth = 100;
 
+/** How a transport property of a pure gas is known, by the key of its method. */
+const methodTexts = {
+  given: 'given',
+  chung:
+    'estimate after Chung, Ajlan, Lee & Starling, Ind. Eng. Chem. Res. 27 (1988) 671; 1.5 % non-polar, a few per cent polar, from about 0.7 Tc',
+  lennardJones: 'kinetic theory of Chapman and Enskog with the Lennard-Jones constants above',
+  chungConductivity:
+    'estimate after Chung, Lee & Starling, Ind. Eng. Chem. Fundam. 23 (1984) 8; a few per cent non-polar, 5 to 10 % and more polar',
+} as const;
+
+function viscosityOrigin({ viscositySource }: SpeciesFacts, { viscosityMethod }: PropertyTable): string {
+  return viscositySource ?? (viscosityMethod ? methodTexts[viscosityMethod] : 'not known');
+}
+
+function conductivityOrigin(
+  { conductivitySource }: SpeciesFacts,
+  { conductivityMethod }: PropertyTable,
+): string {
+  return conductivitySource ?? (conductivityMethod ? methodTexts[conductivityMethod] : 'not known');
+}
+
 /** One line for each species. */
 export function speciesList(species: readonly SpeciesFacts[], useColour: boolean): string {
   const colour = pc.createColors(useColour);
@@ -45,9 +66,11 @@ export function speciesReport(species: SpeciesFacts, properties: PropertyTable, 
       lineWidth,
     ),
     propertyText(properties, colour.bold),
-    species.transportSources.length > 0
-      ? ['Viscosity and conductivity of the dilute gas', ...species.transportSources.map(bullet)].join('\n')
-      : 'Viscosity and conductivity are estimates for the dilute gas, after Chung et al. (1984, 1988) or, of hydrogen and helium, by their Lennard-Jones constants.',
+    [
+      'Viscosity and conductivity of the dilute gas',
+      bullet(`viscosity: ${viscosityOrigin(species, properties)}`),
+      bullet(`conductivity: ${conductivityOrigin(species, properties)}`),
+    ].join('\n'),
     ...(species.cautions.length > 0
       ? [['Cautions', ...species.cautions.map((text) => colour.yellow(bullet(text)))].join('\n')]
       : []),
@@ -59,7 +82,7 @@ function propertyText(properties: PropertyTable, emphasise: (text: string) => st
   const cells = (values: Float64Array, factor: number, digits: number): string[] =>
     Array.from(values, (value) => (Number.isFinite(value) ? (value * factor).toFixed(digits) : '–'));
   const columns: readonly (readonly [head: string, cells: readonly string[]])[] = [
-    ['T, K', cells(temperatures, 1, 0)],
+    ['T, K', cells(temperatures, 1, temperatures.every(Number.isInteger) ? 0 : 2)],
     ['Cp, J/(mol K)', cells(properties.heatCapacities, 1, 2)],
     ['H-H298, kJ/mol', cells(properties.enthalpies, 1e-3, 3)],
     ['S, J/(mol K)', cells(properties.entropies, 1, 2)],
@@ -130,6 +153,8 @@ export function speciesJson(species: SpeciesFacts, properties?: PropertyTable): 
     ),
     cautions: [...species.cautions],
     ...(properties && {
+      viscosity_source: viscosityOrigin(species, properties),
+      thermal_conductivity_source: conductivityOrigin(species, properties),
       properties: Object.fromEntries(
         propertyColumns(properties).map(({ header, values }) => [header, numbers(values)]),
       ),

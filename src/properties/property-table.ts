@@ -1,6 +1,7 @@
 import type { SpeciesRecord } from './species-record.js';
 import { createSpeciesThermochemistry, referenceTemperature } from './thermochemistry.js';
 import { createGasConductivity, missingForConductivity } from './transport/pure-gas-conductivity.js';
+import type { PureGasProperty } from './transport/pure-gas-property.js';
 import { createGasViscosity, missingForViscosity } from './transport/pure-gas-viscosity.js';
 
 /** Properties of a pure ideal gas over temperature; one entry per temperature, NaN where the record does not tell. */
@@ -19,6 +20,9 @@ export interface PropertyTable {
   readonly viscosities: Float64Array;
   /** W/(m K), at low pressure */
   readonly thermalConductivities: Float64Array;
+  /** How the two are known; undefined where they are not. */
+  readonly viscosityMethod: PureGasProperty['method'] | undefined;
+  readonly conductivityMethod: PureGasProperty['method'] | undefined;
 }
 
 /** @param temperatures - K, > 0 */
@@ -42,5 +46,7 @@ export function propertyTable(record: SpeciesRecord, temperatures: readonly numb
     ),
     viscosities: column((temperature) => viscosity?.value(temperature) ?? Number.NaN),
     thermalConductivities: column((temperature) => conductivity?.value(temperature) ?? Number.NaN),
+    viscosityMethod: viscosity?.method,
+    conductivityMethod: conductivity?.method,
   };
 }

@@ -29,6 +29,7 @@ function kind(
 export type QuantityKindName =
   | 'length'
   | 'temperature'
+  | 'temperatureDifference'
   | 'pressure'
   | 'pressureDifference'
   | 'molarFlow'
@@ -55,6 +56,9 @@ export type QuantityKindName =
 export const quantityKinds: Readonly<Record<QuantityKindName, QuantityKind>> = {
   length: kind('length', [0, 1, 0, 0, 0], 'a length', '4 mm', ['m', 'mm', 'cm', 'inch', 'ft']),
   temperature: kind('temperature', [0, 0, 0, 0, 1], 'a temperature', '640 K', ['K', 'degC', 'degF'], true),
+  temperatureDifference: kind('temperature_difference', [0, 0, 0, 0, 1], 'a temperature difference', '25 K', [
+    'K',
+  ]),
   pressure: kind('pressure', [1, -1, -2, 0, 0], 'an absolute pressure', '1.6 bar', [
     'bar',
     'Pa',

@@ -4,16 +4,14 @@ import type { SpeciesFacts } from '../../properties/species/species-facts.js';
 import { lineChart, pointsOf } from './line-chart.js';
 import { createChartRenderer } from './render-chart.js';
 
-const overTemperature = 'Temperature / K';
+interface SpeciesChart {
+  readonly name: string;
+  readonly configuration: ReturnType<typeof lineChart>;
+}
 
-/** PNG pictures by file name. */
-export function drawSpeciesCharts(
-  species: SpeciesFacts,
-  properties: PropertyTable,
-): { readonly name: string; readonly content: Uint8Array }[] {
-  const { temperatures } = properties;
+/** Heat capacity, viscosity and conductivity over temperature, as data; what is not known has no chart. */
+export function speciesCharts(species: SpeciesFacts, properties: PropertyTable): SpeciesChart[] {
   const subtitle = `${species.name}, ${species.formula}; dilute gas`;
-  const render = createChartRenderer();
   const charts = [
     {
       name: 'heat-capacity.png',
@@ -41,14 +39,24 @@ export function drawSpeciesCharts(
     .filter(({ values }) => values.some(Number.isFinite))
     .map(({ name, values, factor, title, yTitle }) => ({
       name,
-      content: render(
-        lineChart({
-          title,
-          subtitle,
-          xTitle: overTemperature,
-          yTitle,
-          series: [{ label: species.id, points: pointsOf(temperatures, values, factor) }],
-        }),
-      ),
+      configuration: lineChart({
+        title,
+        subtitle,
+        xTitle: 'Temperature / K',
+        yTitle,
+        series: [{ label: species.id, points: pointsOf(properties.temperatures, values, factor) }],
+      }),
     }));
+}
+
+/** The same as PNG pictures, by file name. */
+export function drawSpeciesCharts(
+  species: SpeciesFacts,
+  properties: PropertyTable,
+): { readonly name: string; readonly content: Uint8Array }[] {
+  const render = createChartRenderer();
+  return speciesCharts(species, properties).map(({ name, configuration }) => ({
+    name,
+    content: render(configuration),
+  }));
 }

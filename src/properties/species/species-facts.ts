@@ -30,8 +30,9 @@ export interface SpeciesFacts {
   readonly temperatureRange: readonly [number, number];
   readonly polynomialSource: string;
   readonly facts: readonly SpeciesFact[];
-  /** Where viscosity and conductivity come from; empty where both are estimated. */
-  readonly transportSources: readonly string[];
+  /** Of the formulas for the dilute gas; undefined where the library has none and they are estimated. */
+  readonly viscositySource: string | undefined;
+  readonly conductivitySource: string | undefined;
   readonly cautions: readonly string[];
 }
 
@@ -136,9 +137,8 @@ function toFacts(entry: LibraryEntry): SpeciesFacts {
     temperatureRange: [thermochemistry.lowest, thermochemistry.ranges.at(-1)!.highest],
     polynomialSource: `${librarySources[thermochemistry.source]}${quality}`,
     facts,
-    transportSources: [entry.viscosity, entry.thermalConductivity].flatMap((formula) =>
-      formula ? [librarySources[formula[1]]] : [],
-    ),
+    viscositySource: entry.viscosity && librarySources[entry.viscosity[1]],
+    conductivitySource: entry.thermalConductivity && librarySources[entry.thermalConductivity[1]],
     cautions: entry.cautions ?? [],
   };
 }
