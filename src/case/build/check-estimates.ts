@@ -9,9 +9,8 @@ import { missingForPressureCorrection } from '../../properties/transport/pseudo-
 import { missingForConductivity } from '../../properties/transport/pure-gas-conductivity.js';
 import { missingForViscosity } from '../../properties/transport/pure-gas-viscosity.js';
 import { transportMethods } from '../../properties/transport/transport-methods.js';
-import { problemAt, type CaseContext } from '../case-context.js';
-import { isOwnRecord } from './species-source.js';
-import { recordKeys } from './record-keys.js';
+import type { CaseContext } from '../case-context.js';
+import { equationEstimate, reportMissing } from './report-missing.js';
 
 /** One estimate of a case: whose data it needs, and what there is to say of it. */
 interface Estimate {
@@ -41,13 +40,7 @@ export function checkEstimates(
         const key = `${record.id} ${field}`;
         if (reported.has(key)) continue;
         reported.add(key);
-        const where = isOwnRecord(record) ? '' : ' in the species library';
-        problemAt(context, ['species', record.id], {
-          code: 'missing_property',
-          found: `no \`${recordKeys[field]}\` of ${record.id}${where}`,
-          expected: `it, since ${estimate.what} is estimated`,
-          mend: `add it to the species, or ${estimate.mend}`,
-        });
+        reportMissing(context, record, field, estimate.what, estimate.mend);
       }
     });
     assumptions.push(...estimate.assumptions.map((entry) => ({ about: estimate.about, ...entry })));
@@ -67,9 +60,8 @@ function estimatesOf(specification: ReactorSpecification, isActive: readonly boo
   if (fluid.equationOfState.kind !== 'ideal') {
     estimates.push({
       about: 'fluid.equation_of_state',
-      what: 'the gas, by its equation of state,',
+      ...equationEstimate,
       missing: (record) => missingForEquation(fluid.equationOfState, record),
-      mend: 'take `equation_of_state: ideal`',
       assumptions: [],
     });
   }

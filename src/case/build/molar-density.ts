@@ -8,6 +8,7 @@ import { problemAt, type CaseContext } from '../case-context.js';
 import type { MolarDensity } from './build-feed.js';
 import type { SpeciesSection } from './build-species.js';
 import { complete } from './holes.js';
+import { equationEstimate, reportMissing } from './report-missing.js';
 
 /** Density of the feed for flows given by volume, by the case's own equation of state. */
 export function createMolarDensity(
@@ -18,8 +19,14 @@ export function createMolarDensity(
   return (moleFractions, temperature, pressure) => {
     const records = species && complete(species.records);
     if (!equation || !records) return undefined;
-    // What is missing is reported where the species' data are checked.
-    if (records.some((record) => missingForEquation(equation, record).length > 0)) return undefined;
+    let isComplete = true;
+    for (const record of records) {
+      for (const field of missingForEquation(equation, record)) {
+        isComplete = false;
+        reportMissing(context, record, field, equationEstimate.what, equationEstimate.mend);
+      }
+    }
+    if (!isComplete) return undefined;
     const state = createFluidState(records.length);
     const isFound = createEquationOfState(equation, records).evaluate(
       Float64Array.from(moleFractions),
