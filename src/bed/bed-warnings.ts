@@ -1,3 +1,4 @@
+import { filmCorrelations, type FilmCorrelation } from '../pellet/film/film-correlations.js';
 import type { Balances } from './balances.js';
 import type { ReactorModel } from './reactor-model.js';
 import type { RunResult } from './run-result.js';
@@ -61,6 +62,11 @@ export function bedWarnings(
     const outside = reynoldsOutside(reynoldsNumbers);
     if (outside) warnings.push(outside);
   }
+  const { film } = pellet.transport;
+  if (film.kind === 'correlation') {
+    const outside = filmOutside(filmCorrelations[film.name], reynoldsNumbers, model.solidFraction);
+    if (outside) warnings.push(outside);
+  }
   return warnings;
 }
 
@@ -69,6 +75,21 @@ function reynoldsOutside(numbers: Float64Array): string | undefined {
   const highest = Math.max(...numbers);
   if (lowest >= frictionRange.lowest && highest <= frictionRange.highest) return undefined;
   return `The packed-bed Reynolds number runs from ${lowest.toPrecision(3)} to ${highest.toPrecision(3)}; the friction law was fitted for ${frictionRange.lowest} to ${frictionRange.highest} (Ergun 1952).`;
+}
+
+function filmOutside(
+  { name, reynoldsRange, source }: FilmCorrelation,
+  reynoldsNumbers: Float64Array,
+  solidFraction: number,
+): string | undefined {
+  const lowest = Math.min(...reynoldsNumbers) * solidFraction;
+  const highest = Math.max(...reynoldsNumbers) * solidFraction;
+  if (lowest >= reynoldsRange[0] && highest <= reynoldsRange[1]) return undefined;
+  const slow =
+    lowest < 10
+      ? '; at low Reynolds numbers dispersion and uneven flow make real films slower than any such correlation says'
+      : '';
+  return `The Reynolds number of the pellets runs from ${lowest.toPrecision(3)} to ${highest.toPrecision(3)}; the film correlation of ${name} was fitted for ${reynoldsRange[0]} to ${reynoldsRange[1]} (${source})${slow}.`;
 }
 
 /** Leaves out what is no number: pellets without a state. */

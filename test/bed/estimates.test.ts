@@ -166,3 +166,14 @@ heat: {mode: cooled, overall_coefficient: 400 W/(m^2 K), coolant: {temperature: 
     expect(errors[0]!.expected).toMatch(/dew point, \d+\.\d K/);
   });
 });
+
+describe('ranges along the bed', () => {
+  it('a film correlation outside its Reynolds numbers is a warning that names them', () => {
+    const bed = traceBed((text) => text.replace('velocity: 0.8 m/s', 'velocity: 0.5 mm/s'));
+    const { warnings } = solveReactor(bed);
+    expect(warnings.some((text) => text.includes('Wakao–Funazkri') && text.includes('3 to 10000'))).toBe(
+      true,
+    );
+    expect(solveReactor(traceBed()).warnings.some((text) => text.includes('Wakao'))).toBe(false);
+  });
+});
