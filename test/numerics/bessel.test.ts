@@ -4,7 +4,7 @@ import { scaledBesselI, scaledBesselK } from '../../src/numerics/bessel.js';
 /** x; e^(-x) I0, e^(-x) I1, e^x K0, e^x K1: Abramowitz & Stegun (1964), table 9.8, ten places; digits checked with scipy.special.ive and kve, SciPy 1.17. */
 const table98 = [
   [0.1, 0.9071009258, 0.0452984468, 2.6823261023, 10.8901826831],
-  [1, 0.4657596076, 0.2079104154, 1.1444630797, 1.6361534863],
+  [1, 0.4657596076, 0.2079104154, 1.1444630798, 1.6361534863],
   [5, 0.1835408126, 0.1639722669, 0.5478075643, 0.6002738588],
   [10, 0.1278333372, 0.1212626814, 0.3916319344, 0.4107665706],
 ] as const;
