@@ -1,10 +1,10 @@
 /** The command `species`: list, search, one species with its table, and what it refuses. */
-import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { existsSync, mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { librarySpeciesIds } from '../../src/properties/species/library.js';
-import { run } from './in-process.js';
+import { quickCase, run } from './in-process.js';
 
 let folder = '';
 beforeEach(() => {
@@ -112,5 +112,41 @@ describe('species', () => {
     const { status } = await run('species', 'H2O', '--out', join(folder, '..'));
     expect(status).toBe(2);
     expect(existsSync(folder)).toBe(true);
+  });
+});
+
+describe('species files of a case', () => {
+  const good = 'bedwright_species: 1\nspecies: { X: { formula: C3H8O } }\n';
+  const check = async (content: string | undefined): Promise<{ status: number; error: string }> => {
+    const path = join(folder, 'plant.yaml');
+    writeFileSync(path, `${readFileSync(quickCase, 'utf8')}\nspecies_files: [own.yaml]\n`);
+    if (content !== undefined) writeFileSync(join(folder, 'own.yaml'), content);
+    return run('check', path);
+  };
+
+  it('are found beside the case, wherever the program was started', async () => {
+    expect(await check(good)).toMatchObject({ status: 0, error: '' });
+  });
+
+  it('at fault are named with their own path, line and column, and the line is shown', async () => {
+    const { status, error } = await check(good.replace('C3H8O', 'C3H8Zz'));
+    expect(status).toBe(2);
+    expect(error).toContain(`${join(folder, 'own.yaml')}:2:30  species.X.formula`);
+    expect(error).toContain('  2 | species: { X: { formula: C3H8Zz } }');
+  });
+
+  it('that are not there, a folder, or larger than any library, are refused by name', async () => {
+    const missing = await check(undefined);
+    expect(missing.status).toBe(2);
+    expect(missing.error).toContain(`${join(folder, 'own.yaml')}\n`);
+    expect(missing.error).toContain('no such file');
+    const large = await check(`${good}#${'x'.repeat(3_000_000)}\n`);
+    expect(large.status).toBe(2);
+    expect(large.error).toContain('3.0 MB');
+    rmSync(join(folder, 'own.yaml'));
+    mkdirSync(join(folder, 'own.yaml'));
+    const directory = await check(undefined);
+    expect(directory.status).toBe(2);
+    expect(directory.error).toContain('a folder');
   });
 });
